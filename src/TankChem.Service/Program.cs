@@ -1,1 +1,3 @@
-return 0;
+using TankChem.Service.CommandLine;
+
+return await Cli.RunAsync(args, Console.Out, Console.Error);

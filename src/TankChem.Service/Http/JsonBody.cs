@@ -1,0 +1,16 @@
+using System.Text.Json;
+
+namespace TankChem.Service.Http;
+
+/// <summary>A JSON answer written straight to the response.</summary>
+internal sealed class JsonBody(Action<Utf8JsonWriter> write) : IResult
+{
+    public async Task ExecuteAsync(HttpContext httpContext)
+    {
+        ArgumentNullException.ThrowIfNull(httpContext);
+        httpContext.Response.ContentType = "application/json; charset=utf-8";
+        await using (var writer = new Utf8JsonWriter(httpContext.Response.BodyWriter))
+            write(writer);
+        await httpContext.Response.BodyWriter.FlushAsync(httpContext.RequestAborted);
+    }
+}
