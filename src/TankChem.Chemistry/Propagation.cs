@@ -1,0 +1,144 @@
+namespace TankChem.Chemistry;
+
+/// <summary>First-order propagation: each input and constant is moved by a small step to both sides, everything else held; contributions add in squares.</summary>
+internal static class Propagation
+{
+    /// <summary>Small against any measurement, large against the rounding of a solved pH (1e-13): the central difference is good to about 1e-7 relative.</summary>
+    private const double RelativeStep = 1e-4;
+
+    public static CarbonateUncertainty Of(Solution solution, in CarbonateInput input, in CarbonateState state, in InputUncertainty u)
+    {
+        var sum = new Squares(state);
+        if (u.PH > 0 && input.PH is { } ph)
+            sum.Add(solution, solution, input with { PH = ph + RelativeStep }, input with { PH = ph - RelativeStep }, default, default, u.PH / RelativeStep);
+        if (u.AlkalinityUmolKg > 0 && input.AlkalinityUmolKg is { } alkalinity)
+        {
+            double step = Step(alkalinity, u.AlkalinityUmolKg);
+            sum.Add(solution, solution, input with { AlkalinityUmolKg = alkalinity + step }, input with { AlkalinityUmolKg = alkalinity - step }, default, default, u.AlkalinityUmolKg / step);
+        }
+
+        if (u.DicUmolKg > 0 && input.DicUmolKg is { } dic)
+        {
+            double step = Step(dic, u.DicUmolKg);
+            sum.Add(solution, solution, input with { DicUmolKg = dic + step }, input with { DicUmolKg = dic - step }, default, default, u.DicUmolKg / step);
+        }
+
+        if (u.Pco2Uatm > 0 && input.Pco2Uatm is { } pco2)
+        {
+            double step = Step(pco2, u.Pco2Uatm);
+            sum.Add(solution, solution, input with { Pco2Uatm = pco2 + step }, input with { Pco2Uatm = pco2 - step }, default, default, u.Pco2Uatm / step);
+        }
+
+        if (u.TemperatureC > 0)
+        {
+            const double step = 1e-3;
+            sum.Add(solution with { TemperatureC = solution.TemperatureC + step }, solution with { TemperatureC = solution.TemperatureC - step }, input, input, default, default, u.TemperatureC / step);
+        }
+
+        if (u.Salinity > 0 && solution.Salinity > 0)
+        {
+            double step = RelativeStep * solution.Salinity;
+            sum.Add(solution with { Salinity = solution.Salinity + step }, solution with { Salinity = solution.Salinity - step }, input, input, default, default, u.Salinity / step);
+        }
+
+        if (u.IncludeConstants)
+            AddConstants(ref sum, solution, input);
+        return sum.Root();
+    }
+
+    private static void AddConstants(ref Squares sum, Solution solution, in CarbonateInput input)
+    {
+        const double e = RelativeStep;
+        Add(ref sum, solution, input, new() { PK0 = e }, new() { PK0 = -e }, ConstantShift.UPK0 / e);
+        Add(ref sum, solution, input, new() { PK1 = e }, new() { PK1 = -e }, ConstantShift.UPK1 / e);
+        Add(ref sum, solution, input, new() { PK2 = e }, new() { PK2 = -e }, ConstantShift.UPK2 / e);
+        Add(ref sum, solution, input, new() { PKW = e }, new() { PKW = -e }, ConstantShift.UPKW / e);
+        Add(ref sum, solution, input, new() { PKNh4 = e }, new() { PKNh4 = -e }, ConstantShift.UPKNh4 / e);
+        Add(ref sum, solution, input, new() { PKspCalcite = e }, new() { PKspCalcite = -e }, ConstantShift.UPKsp / e);
+        Add(ref sum, solution, input, new() { PKspAragonite = e }, new() { PKspAragonite = -e }, ConstantShift.UPKsp / e);
+        if (Blend.ShareOfSea(solution.Salinity) > 0 || solution.Constants is ConstantSet.Millero2010 or ConstantSet.Waters2014 or ConstantSet.Lueker2000)
+        {
+            Add(ref sum, solution, input, new() { PKB = e }, new() { PKB = -e }, ConstantShift.UPKB / e);
+            Add(ref sum, solution, input, new() { BoronRelative = e }, new() { BoronRelative = -e }, ConstantShift.UBoronRelative / e);
+        }
+
+        bool ionsAssumed = solution.Ions is null && solution.Constants is ConstantSet.Auto or ConstantSet.Fresh && Blend.ShareOfSea(solution.Salinity) < 1;
+        if (ionsAssumed)
+        {
+            double ln = Math.Log(ConstantShift.IonSpread);
+            Add(ref sum, solution, input, new() { LnAssumedIons = ln }, new() { LnAssumedIons = -ln }, 1);
+        }
+    }
+
+    private static void Add(ref Squares sum, Solution solution, in CarbonateInput input, in ConstantShift up, in ConstantShift down, double factor) =>
+        sum.Add(solution, solution, input, input, up, down, factor);
+
+    private static double Step(double value, double u) => Math.Max(Math.Abs(value) * RelativeStep, u * 1e-6);
+
+    /// <summary>Sums of squares of the contributions.</summary>
+    private struct Squares(CarbonateState state)
+    {
+        private readonly CarbonateState state = state;
+        private double ph;
+        private double alkalinity;
+        private double dic;
+        private double co2;
+        private double co2MgL;
+        private double hco3;
+        private double co3;
+        private double pco2;
+        private double nh3;
+        private double closed;
+        private double open;
+        private double calcite;
+        private double aragonite;
+
+        public void Add(Solution upSolution, Solution downSolution, in CarbonateInput upInput, in CarbonateInput downInput, in ConstantShift upShift, in ConstantShift downShift, double factor)
+        {
+            CarbonateState up = CarbonateSystem.Solve(upSolution, upInput, upShift);
+            CarbonateState down = CarbonateSystem.Solve(downSolution, downInput, downShift);
+
+            // At an edge of what is possible only one side exists: the slope is then taken there.
+            double span = 0.5;
+            if (up.Status != SolveStatus.Solved)
+                (up, span) = (state, 1);
+            else if (down.Status != SolveStatus.Solved)
+                (down, span) = (state, 1);
+            if (down.Status != SolveStatus.Solved)
+                return;
+            double f = factor * span;
+            ph += Square(f * (up.PhNbs - down.PhNbs));
+            alkalinity += Square(f * (up.AlkalinityUmolKg - down.AlkalinityUmolKg));
+            dic += Square(f * (up.DicUmolKg - down.DicUmolKg));
+            co2 += Square(f * (up.Co2UmolKg - down.Co2UmolKg));
+            co2MgL += Square(f * (up.Co2MgL - down.Co2MgL));
+            hco3 += Square(f * (up.Hco3UmolKg - down.Hco3UmolKg));
+            co3 += Square(f * (up.Co3UmolKg - down.Co3UmolKg));
+            pco2 += Square(f * (up.Pco2Uatm - down.Pco2Uatm));
+            nh3 += Square(f * (up.Nh3Fraction - down.Nh3Fraction));
+            closed += Square(f * (up.BufferClosedUmolKg - down.BufferClosedUmolKg));
+            open += Square(f * (up.BufferOpenUmolKg - down.BufferOpenUmolKg));
+            calcite += Square(f * (up.OmegaCalcite - down.OmegaCalcite));
+            aragonite += Square(f * (up.OmegaAragonite - down.OmegaAragonite));
+        }
+
+        public readonly CarbonateUncertainty Root() => new()
+        {
+            PhNbs = Math.Sqrt(ph),
+            AlkalinityUmolKg = Math.Sqrt(alkalinity),
+            DicUmolKg = Math.Sqrt(dic),
+            Co2UmolKg = Math.Sqrt(co2),
+            Co2MgL = Math.Sqrt(co2MgL),
+            Hco3UmolKg = Math.Sqrt(hco3),
+            Co3UmolKg = Math.Sqrt(co3),
+            Pco2Uatm = Math.Sqrt(pco2),
+            Nh3Fraction = Math.Sqrt(nh3),
+            BufferClosedUmolKg = Math.Sqrt(closed),
+            BufferOpenUmolKg = Math.Sqrt(open),
+            OmegaCalcite = Math.Sqrt(calcite),
+            OmegaAragonite = Math.Sqrt(aragonite),
+        };
+
+        private static double Square(double x) => x * x;
+    }
+}
