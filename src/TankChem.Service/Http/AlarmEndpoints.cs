@@ -19,7 +19,7 @@ internal static class AlarmEndpoints
         {
             w.WriteStartArray();
             foreach (AlarmView alarm in alarms)
-                AlarmBody.Write(w, alarm);
+                AlarmBody.Write(w, alarm, farm.IsDemo);
             w.WriteEndArray();
         });
     }
@@ -37,7 +37,7 @@ internal static class AlarmEndpoints
         if (!result.Done)
             return Problem.Refused(result.Fault!);
         AlarmView? now = farm.Find(key.Place)?.Alarms.FirstOrDefault(a => a.Key == key);
-        return now is null ? Results.NoContent() : new JsonBody(w => AlarmBody.Write(w, now));
+        return now is null ? Results.NoContent() : new JsonBody(w => AlarmBody.Write(w, now, farm.IsDemo));
     }
 
     private static bool Matches(AlarmView alarm, string? state) => state switch

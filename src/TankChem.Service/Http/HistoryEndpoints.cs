@@ -1,5 +1,6 @@
 using System.Globalization;
 using System.Text.Json;
+using TankChem.Monitoring.Bodies;
 using TankChem.Monitoring.Places;
 using TankChem.Monitoring.Ports;
 using TankChem.Monitoring.Readings;
@@ -99,7 +100,7 @@ internal static class HistoryEndpoints
 
     private static string NextPath(PlaceKey key, string quantity, DateTimeOffset from, DateTimeOffset to, int limit, Reading last) => string.Create(
         CultureInfo.InvariantCulture,
-        $"/api/v1/places/{key.Site}/{key.Place}/readings?quantity={quantity}&from={Rfc3339(from)}&to={Rfc3339(to)}&limit={limit}&after={last.Time.ToUnixTimeMilliseconds()}-{last.Series.Probe}");
+        $"/api/v1/places/{key.Site}/{key.Place}/readings?quantity={quantity}&from={Rfc3339.Text(from)}&to={Rfc3339.Text(to)}&limit={limit}&after={last.Time.ToUnixTimeMilliseconds()}-{last.Series.Probe}");
 
     private static bool TryReadCursor(string text, out ReadingCursor cursor)
     {
@@ -118,7 +119,5 @@ internal static class HistoryEndpoints
         return PlaceNames.IsValidId(quantity) ? null : $"quantity: \"{quantity}\" is not a quantity; its name is 1 to 64 of a-z 0-9 - _.";
     }
 
-    private static void WriteTime(Utf8JsonWriter w, string name, DateTimeOffset time) => w.WriteString(name, Rfc3339(time));
-
-    private static string Rfc3339(DateTimeOffset time) => time.UtcDateTime.ToString("yyyy-MM-dd'T'HH:mm:ss.FFF'Z'", CultureInfo.InvariantCulture);
+    private static void WriteTime(Utf8JsonWriter w, string name, DateTimeOffset time) => w.WriteString(name, Rfc3339.Text(time));
 }

@@ -1,4 +1,5 @@
 using System.Text.Json;
+using TankChem.Monitoring.Bodies;
 
 namespace TankChem.Service.Http;
 
@@ -9,7 +10,7 @@ internal sealed class JsonBody(Action<Utf8JsonWriter> write) : IResult
     {
         ArgumentNullException.ThrowIfNull(httpContext);
         httpContext.Response.ContentType = "application/json; charset=utf-8";
-        await using (var writer = new Utf8JsonWriter(httpContext.Response.BodyWriter))
+        await using (var writer = new Utf8JsonWriter(httpContext.Response.BodyWriter, WaterBody.Options))
             write(writer);
         await httpContext.Response.BodyWriter.FlushAsync(httpContext.RequestAborted);
     }

@@ -17,7 +17,7 @@ internal static class PlaceEndpoints
         {
             w.WriteStartArray();
             foreach (PlaceSnapshot place in places)
-                Write(w, place);
+                Write(w, place, farm);
             w.WriteEndArray();
         });
     }
@@ -26,7 +26,7 @@ internal static class PlaceEndpoints
     {
         var key = new PlaceKey(site, place);
         return farm.Find(key) is { } snapshot
-            ? new JsonBody(w => WaterBody.Write(w, snapshot.Water))
+            ? new JsonBody(w => WaterBody.Write(w, snapshot.Water, farm.IsDemo))
             : Problem.NotFound($"There is no place {key}.");
     }
 
@@ -40,25 +40,25 @@ internal static class PlaceEndpoints
         if (!DosePlanBody.TryParse(body, out DoseTarget? target, out IReadOnlyList<string> reagents, out string? fault))
             return Problem.BadRequest(fault!);
         DosePlan plan = operations.PlanDose(key, target!, reagents);
-        return new JsonBody(w => DosePlanBody.Write(w, plan));
+        return new JsonBody(w => DosePlanBody.Write(w, plan, farm.Now, farm.IsDemo));
     }
 
-    private static void Write(Utf8JsonWriter w, PlaceSnapshot place)
+    private static void Write(Utf8JsonWriter w, PlaceSnapshot place, IFarm farm)
     {
         w.WriteStartObject();
         w.WriteString("site", place.Definition.Key.Site);
         w.WriteString("id", place.Definition.Key.Place);
-        w.WriteString("kind", KindNames.Of(place.Definition.Kind));
+        w.WriteString("kind", PlaceKindNames.Of(place.Definition.Kind));
         w.WriteString("name", place.Definition.Name);
         w.WriteBoolean("assigned", place.Definition.Assigned);
         w.WriteString("sentence", place.Sentence);
         w.WritePropertyName("worstAlarm");
         if (place.Alarms.FirstOrDefault(a => a.IsActive || a.NeedsAcknowledgement) is { } worst)
-            AlarmBody.Write(w, worst);
+            AlarmBody.Write(w, worst, farm.IsDemo);
         else
             w.WriteNullValue();
         w.WritePropertyName("water");
-        WaterBody.Write(w, place.Water);
+        WaterBody.Write(w, place.Water, farm.IsDemo);
         w.WriteEndObject();
     }
 }

@@ -1,10 +1,11 @@
 using TankChem.Monitoring.Places;
 
-namespace TankChem.Service.Http;
+namespace TankChem.Monitoring.Bodies;
 
-/// <summary>Kinds of place as the API writes them.</summary>
-internal static class KindNames
+/// <summary>Kinds of place as bodies write them.</summary>
+public static class PlaceKindNames
 {
+    /// <summary><c>tank</c>, <c>loop</c> or <c>site</c>.</summary>
     public static string Of(PlaceKind kind) => kind switch
     {
         PlaceKind.Tank => "tank",
