@@ -118,6 +118,7 @@ internal static class LimitRules
             FirstAction = "Oxygen and air on; stop feeding.",
             OnDelay = TimeSpan.FromMinutes(1),
             DeadbandAbsolute = 3,
+            GuardAbsolute = 5,
         },
         new()
         {
@@ -132,6 +133,7 @@ internal static class LimitRules
             FirstAction = "Oxygen and air on; stop feeding.",
             OnDelay = TimeSpan.FromMinutes(1),
             DeadbandAbsolute = 0.3,
+            GuardAbsolute = 0.5,
         },
         new()
         {

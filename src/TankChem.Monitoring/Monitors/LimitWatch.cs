@@ -57,8 +57,8 @@ internal sealed class LimitWatch : WatchedRule
         Value = value.Value;
         _u = value.U;
         _knownAt = value.Time;
-        if (_condition.IsInDoubt(value.Value, value.U) && !_condition.IsPast(value.Value))
-            watch.Doubts.Add(new KnowledgeGap(_rule.Name, OldestInput(value), KnowledgeGapKind.TooOld, DoubtText(value)));
+        if (_condition.IsInDoubt(value.Value, value.U) && !_condition.IsPast(value.Value) && AgedInput(value) is { } aged)
+            watch.Doubts.Add(new KnowledgeGap(_rule.Name, aged, KnowledgeGapKind.TooOld, DoubtText(value)));
         return _last = _condition.Holds(value.Value, value.U, HeldBefore) ? AlarmEventKind.ConditionPresent : AlarmEventKind.ConditionAbsent;
     }
 
@@ -101,16 +101,16 @@ internal sealed class LimitWatch : WatchedRule
     private string DoubtText(WaterValue value) =>
         $"{Number(value.Value, _rule.Digits)} ± {Number(value.U!.Value, _rule.Digits)}{Unit} may be past the {LimitWord} {Number(_limit.Limit.Value, _rule.Digits)}";
 
-    private static string OldestInput(WaterValue value)
+    /// <summary>The input whose age makes the doubt; null when all are of today, for then a new test would not lessen it.</summary>
+    private static string? AgedInput(WaterValue value)
     {
-        string quantity = "";
-        double oldest = -1;
+        WaterInput? oldest = null;
         foreach (WaterInput input in value.Inputs)
         {
-            if (input.AgeS > oldest)
-                (quantity, oldest) = (input.Quantity, input.AgeS);
+            if (oldest is null || input.AgeS > oldest.AgeS)
+                oldest = input;
         }
 
-        return oldest > TimeSpan.FromHours(12).TotalSeconds ? quantity : "ph";
+        return oldest?.AgeS > TimeSpan.SecondsPerDay ? oldest.Quantity : null;
     }
 }

@@ -69,7 +69,7 @@ internal sealed class RuleSet
 
     private void EnsureSilence(QuantityDefinition definition)
     {
-        if (SilenceWatch.LongestSilence(definition.Id) is not { } longest)
+        if (SilenceWatch.LongestSilence(definition) is not { } longest)
             return;
         foreach (ProbeDefinition probe in _place.Probes)
         {

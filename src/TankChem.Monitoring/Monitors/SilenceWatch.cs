@@ -28,10 +28,10 @@ internal sealed class SilenceWatch : WatchedRule
     }
 
     /// <summary>The quantities that a probe measures by itself, and how long one may be silent. A value taken by hand is never called silent.</summary>
-    public static TimeSpan? LongestSilence(string quantity) => quantity switch
+    public static TimeSpan? LongestSilence(QuantityDefinition definition) => definition.Id switch
     {
-        "ph" or "oxygen" or "oxygen-saturation" or "pco2" => TimeSpan.FromMinutes(10),
-        "temperature" or "salinity" or "conductivity" or "gas-pressure" or "air-co2" => TimeSpan.FromHours(1),
+        "ph" or "oxygen" or "oxygen-saturation" or "pco2" or "temperature" or "gas-pressure" or "air-co2" or "salinity" or "conductivity" =>
+            definition.OldestUsed < TimeSpan.FromDays(1) ? definition.OldestUsed : TimeSpan.FromDays(1),
         _ => null,
     };
 

@@ -1,5 +1,6 @@
 using TankChem.Alarms;
 using TankChem.Monitoring.Alarming;
+using TankChem.Monitoring.Readings;
 using TankChem.Monitoring.Water;
 
 namespace TankChem.Monitoring.Monitors;
@@ -68,7 +69,7 @@ internal sealed class VouchWatch(AlarmKey key, AlarmState state) : WatchedRule(k
 
     private static bool IsToldBySilence(string quantity, PlaceWatch watch)
     {
-        if (SilenceWatch.LongestSilence(quantity) is null)
+        if (SilenceWatch.LongestSilence(QuantityCatalog.Get(quantity)) is null)
             return false;
         return HasProbe(watch.Book.Of(watch.Setup.Place.Key), quantity) || (watch.Setup.IsInLoop && HasProbe(watch.Book.Of(watch.Setup.LoopKey), quantity));
     }
@@ -79,9 +80,9 @@ internal sealed class VouchWatch(AlarmKey key, AlarmState state) : WatchedRule(k
             return false;
         foreach (SeriesBook series in known.Probes)
         {
-            if (series.Latest.Origin != Readings.ReadingOrigin.Manual && !series.Latest.IsUsable)
+            if (series.Latest.Origin != ReadingOrigin.Manual && !series.Latest.IsUsable)
                 return false;
-            if (series.Latest.Origin != Readings.ReadingOrigin.Manual)
+            if (series.Latest.Origin != ReadingOrigin.Manual)
                 return true;
         }
 

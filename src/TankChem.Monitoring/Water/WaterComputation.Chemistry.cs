@@ -129,12 +129,12 @@ internal sealed partial class WaterComputation
         if (_oxygen is { IsStale: false } oxygen && _oxygenSaturation is null or { IsStale: true })
         {
             double percent = 100 * oxygen.Value / saturation;
-            PutComputed("oxygen-saturation", "%", percent, Combine(percent, oxygen, relativeTemperature), GroundOf(oxygen, _temperature));
+            PutComputed("oxygen-saturation", percent, Combine(percent, oxygen, relativeTemperature), GroundOf(oxygen, _temperature));
         }
         else if (_oxygenSaturation is { IsStale: false } share && _oxygen is null or { IsStale: true })
         {
             double amount = share.Value / 100 * saturation;
-            PutComputed("oxygen", "mg/L", amount, Combine(amount, share, relativeTemperature), GroundOf(share, _temperature));
+            PutComputed("oxygen", amount, Combine(amount, share, relativeTemperature), GroundOf(share, _temperature));
         }
     }
 
@@ -199,13 +199,13 @@ internal sealed partial class WaterComputation
     private void PutCarbonates(in CarbonateState state, in CarbonateUncertainty u, Ground ground, Salt salt)
     {
         double mmolPerL = state.DensityKgPerL * 1e-3;
-        PutComputed("co2", "mg/L", state.Co2MgL, u.Co2MgL, ground);
-        PutComputed("hco3", "mmol/L", state.Hco3UmolKg * mmolPerL, u.Hco3UmolKg * mmolPerL, ground);
-        PutComputed("co3", "mmol/L", state.Co3UmolKg * mmolPerL, u.Co3UmolKg * mmolPerL, ground);
-        PutComputed("dic", "mmol/L", state.DicUmolKg * mmolPerL, u.DicUmolKg * mmolPerL, ground);
-        PutComputed("pco2", "µatm", state.Pco2Uatm, u.Pco2Uatm, ground);
-        PutComputed("buffer-closed", "mmol/L per pH", state.BufferClosedUmolKg * mmolPerL, u.BufferClosedUmolKg * mmolPerL, ground);
-        PutComputed("buffer-open", "mmol/L per pH", state.BufferOpenUmolKg * mmolPerL, u.BufferOpenUmolKg * mmolPerL, ground);
+        PutComputed("co2", state.Co2MgL, u.Co2MgL, ground);
+        PutComputed("hco3", state.Hco3UmolKg * mmolPerL, u.Hco3UmolKg * mmolPerL, ground);
+        PutComputed("co3", state.Co3UmolKg * mmolPerL, u.Co3UmolKg * mmolPerL, ground);
+        PutComputed("dic", state.DicUmolKg * mmolPerL, u.DicUmolKg * mmolPerL, ground);
+        PutComputed("pco2", state.Pco2Uatm, u.Pco2Uatm, ground);
+        PutComputed("buffer-closed", state.BufferClosedUmolKg * mmolPerL, u.BufferClosedUmolKg * mmolPerL, ground);
+        PutComputed("buffer-open", state.BufferOpenUmolKg * mmolPerL, u.BufferOpenUmolKg * mmolPerL, ground);
         PutOmega(state, u, ground, salt);
         if (_tan is { IsStale: false } tan)
         {
@@ -214,7 +214,7 @@ internal sealed partial class WaterComputation
             Ground withTan = ground with { Time = tan.Time > ground.Time ? tan.Time : ground.Time, Inputs = [.. ground.Inputs, tan.Input] };
             if (tan.Caveat is not null)
                 withTan = withTan with { Caveats = [.. ground.Caveats, $"TAN {tan.Caveat}"] };
-            PutComputed("nh3-n", "mg/L", state.Nh3Fraction * tan.Value, Math.Sqrt(byShare * byShare + byTan * byTan), withTan);
+            PutComputed("nh3-n", state.Nh3Fraction * tan.Value, Math.Sqrt(byShare * byShare + byTan * byTan), withTan);
         }
     }
 
@@ -233,8 +233,8 @@ internal sealed partial class WaterComputation
             ground = ground with { Inputs = [.. ground.Inputs, calcium.Input] };
         }
 
-        PutComputed("omega-calcite", "", state.OmegaCalcite * factor, u.OmegaCalcite * factor, ground);
-        PutComputed("omega-aragonite", "", state.OmegaAragonite * factor, u.OmegaAragonite * factor, ground);
+        PutComputed("omega-calcite", state.OmegaCalcite * factor, u.OmegaCalcite * factor, ground);
+        PutComputed("omega-aragonite", state.OmegaAragonite * factor, u.OmegaAragonite * factor, ground);
     }
 
     private void ComputeAir(Solution solution, double alkalinityUmolKg, Salt salt)
@@ -244,18 +244,18 @@ internal sealed partial class WaterComputation
         if (air.Status == SolveStatus.Solved)
         {
             Ground ground = CarbonateGround(air.Caveats, salt, null);
-            PutComputed("ph-air", "", air.PhNbs, UncertaintyAtGas(air, relativeU), ground);
+            PutComputed("ph-air", air.PhNbs, UncertaintyAtGas(air, relativeU), ground);
 
             // Henry's constant of CO2 changes by about 3 % a degree (Weiss 1974).
             double relativeTemperature = 0.03 * (_temperature!.U ?? 0);
-            PutComputed("co2-air", "mg/L", air.Co2MgL, air.Co2MgL * Math.Sqrt(relativeU * relativeU + relativeTemperature * relativeTemperature), ground);
+            PutComputed("co2-air", air.Co2MgL, air.Co2MgL * Math.Sqrt(relativeU * relativeU + relativeTemperature * relativeTemperature), ground);
         }
 
         if (!setup.Place.Co2Injection)
             return;
         CarbonateState injected = AtGas(solution, alkalinityUmolKg, PureGasPpm);
         if (injected.Status == SolveStatus.Solved)
-            PutComputed("ph-injected", "", injected.PhNbs, UncertaintyAtGas(injected, 0), CarbonateGround(injected.Caveats, salt, null));
+            PutComputed("ph-injected", injected.PhNbs, UncertaintyAtGas(injected, 0), CarbonateGround(injected.Caveats, salt, null));
     }
 
     private static CarbonateState AtGas(Solution solution, double alkalinityUmolKg, double ppm) => CarbonateSystem.Solve(solution, new CarbonateInput

@@ -179,14 +179,14 @@ internal sealed partial class WaterComputation(WaterSetup setup, ReadingBook boo
     }
 
     /// <summary>A computed value; one that is no number is left out, and the gap says so.</summary>
-    private void PutComputed(string name, string unit, double value, double? u, Ground ground)
+    private void PutComputed(string name, double value, double? u, Ground ground)
     {
         if (!double.IsFinite(value))
             return;
         _values[name] = new WaterValue
         {
             Value = value,
-            Unit = unit,
+            Unit = QuantityCatalog.Get(name).Unit,
             U = u is { } known && double.IsFinite(known) ? Math.Abs(known) : null,
             Time = ground.Time,
             Inputs = ground.Inputs,

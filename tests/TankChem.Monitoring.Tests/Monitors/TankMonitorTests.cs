@@ -26,10 +26,10 @@ public sealed class TankMonitorTests
     [Fact]
     public void Advance_Co2OverTheLimit_IsRaisedAfterTheOnDelayAndNamesTheGroup()
     {
-        Watch watch = Salmonids().At(1, ("ph", 7.02)).At(2, ("ph", 7.02));
+        Watch watch = Salmonids().At(1, ("ph", 7.15)).At(2, ("ph", 7.15));
         Assert.Empty(watch.ActiveRules());
 
-        watch.At(3, ("ph", 7.02));
+        watch.At(3, ("ph", 7.15));
 
         AlarmView alarm = watch.Active("co2-high");
         Assert.Equal(15, alarm.SetPoint);
@@ -43,7 +43,7 @@ public sealed class TankMonitorTests
     [Fact]
     public void Advance_Co2BackInside_ReturnsAfterTheOffDelayAndWaitsForConfirmation()
     {
-        Watch watch = Salmonids().Every(1, 5, ("ph", 7.02)).Every(6, 10, ("ph", 7.4));
+        Watch watch = Salmonids().Every(1, 5, ("ph", 7.15)).Every(6, 10, ("ph", 7.4));
         Assert.True(watch.Alarm("co2-high")!.IsActive);
 
         watch.Every(11, 12, ("ph", 7.4));
@@ -88,7 +88,7 @@ public sealed class TankMonitorTests
     public void Advance_TwoGroups_TheStrictestLimitHoldsAndIsNamed()
     {
         Watch watch = new Watch(Farm.Tank("warm-water", "salmonid"))
-            .At(0, ("alkalinity", 2.0), ("temperature", 14), ("ph", 7.02)).Every(1, 3, ("ph", 7.02));
+            .At(0, ("alkalinity", 2.0), ("temperature", 14), ("ph", 7.15)).Every(1, 3, ("ph", 7.15));
 
         Assert.Equal("salmonids", watch.Active("co2-high").SetBy);
         PlaceLimit low = Assert.Single(watch.Snapshot.Limits, limit => limit is { Quantity: "temperature", IsUpper: false, IsUrgent: false });
@@ -143,7 +143,7 @@ public sealed class TankMonitorTests
     [Fact]
     public void Advance_ProbeFallsSilent_HoldsTheWaterAlarmAndRaisesTheOneAboutKnowledge()
     {
-        Watch watch = Salmonids().Every(1, 5, ("ph", 7.02), ("temperature", 14)).Every(6, 19);
+        Watch watch = Salmonids().Every(1, 5, ("ph", 7.15), ("temperature", 14)).Every(6, 19);
 
         Assert.Contains("when last known", watch.Active("co2-high").Sentence, StringComparison.Ordinal);
         AlarmView silent = watch.Active("ph-silent");
@@ -329,7 +329,7 @@ public sealed class TankMonitorTests
     [Fact]
     public void Advance_RestartInTheMiddleOfAnOnDelay_GoesOnWithIt()
     {
-        Watch watch = Salmonids().At(1, ("ph", 7.02)).Restart().At(2, ("ph", 7.02)).Restart().At(3, ("ph", 7.02));
+        Watch watch = Salmonids().At(1, ("ph", 7.15)).Restart().At(2, ("ph", 7.15)).Restart().At(3, ("ph", 7.15));
 
         Assert.Equal(Watch.Minute(3), watch.Active("co2-high").State.RaisedAt);
     }
@@ -337,9 +337,9 @@ public sealed class TankMonitorTests
     [Fact]
     public void Apply_AcknowledgementOverARestart_IsRemembered()
     {
-        Watch watch = Salmonids().Every(1, 4, ("ph", 7.02));
+        Watch watch = Salmonids().Every(1, 4, ("ph", 7.15));
         Assert.Null(watch.Do(4.5, "co2-high", AlarmAction.Acknowledge, "Ada", "gas is off").Refusal);
-        watch.Restart().At(5, ("ph", 7.02));
+        watch.Restart().At(5, ("ph", 7.15));
 
         AlarmView alarm = watch.Active("co2-high");
         Assert.Equal(AlarmPhase.Acknowledged, alarm.State.Phase);
@@ -350,12 +350,12 @@ public sealed class TankMonitorTests
     [Fact]
     public void Apply_Shelf_HidesUntilItsEndAndRoundsSaysSo()
     {
-        Watch watch = Salmonids().Every(1, 4, ("ph", 7.02));
+        Watch watch = Salmonids().Every(1, 4, ("ph", 7.15));
         watch.Do(5, "co2-high", AlarmAction.Shelve, "Ada", "cleaning", 60);
         Assert.Empty(watch.ActiveRules());
         Assert.Contains("1 alarm shelved or out of service", watch.Snapshot.Sentence, StringComparison.Ordinal);
 
-        watch.Every(6, 61, ("ph", 7.02), ("temperature", 14));
+        watch.Every(6, 61, ("ph", 7.15), ("temperature", 14));
 
         Assert.Contains(watch.Journal, entry => entry is { Change: AlarmChange.ShelfExpired, Who: null });
         Assert.Contains("co2-high", watch.ActiveRules());
@@ -378,10 +378,10 @@ public sealed class TankMonitorTests
     [Fact]
     public void Reconfigure_StockThatSetTheLimitLeaves_EndsItsAlarmAndSaysWhy()
     {
-        Watch watch = Salmonids().Every(1, 4, ("ph", 7.02));
+        Watch watch = Salmonids().Every(1, 4, ("ph", 7.15));
         Assert.Contains("co2-high", watch.ActiveRules());
 
-        watch.Reconfigure(Farm.Tank("reef")).At(5, ("ph", 7.02));
+        watch.Reconfigure(Farm.Tank("reef")).At(5, ("ph", 7.15));
 
         Assert.Null(watch.Alarm("co2-high"));
         Assert.Contains(watch.Journal, entry => entry is { Key.Rule: "co2-high", Change: AlarmChange.ReturnedToNormal } && entry.Sentence.Contains("set-up was changed", StringComparison.Ordinal));
@@ -390,7 +390,7 @@ public sealed class TankMonitorTests
     [Fact]
     public void Reconfigure_SameRules_KeepsTheAlarmStates()
     {
-        Watch watch = Salmonids().Every(1, 4, ("ph", 7.02)).Reconfigure(Farm.Tank("salmonid") with { VolumeM3 = 9 }).At(5, ("ph", 7.02));
+        Watch watch = Salmonids().Every(1, 4, ("ph", 7.15)).Reconfigure(Farm.Tank("salmonid") with { VolumeM3 = 9 }).At(5, ("ph", 7.15));
 
         Assert.Contains("co2-high", watch.ActiveRules());
         Assert.Single(watch.Raised(), "co2-high");
