@@ -12,6 +12,7 @@ internal sealed class RuleSet
     private readonly Dictionary<string, WatchedRule> _byId = new(StringComparer.Ordinal);
     private readonly Dictionary<string, AlarmState> _remembered;
     private readonly PlaceDefinition _place;
+    private readonly int? _fixedCount;
 
     /// <param name="setup">The place as it is set up.</param>
     /// <param name="book">What was heard of it.</param>
@@ -27,10 +28,11 @@ internal sealed class RuleSet
         Add(PeopleWatch.Rule, state => new PeopleWatch(KeyOf(PeopleWatch.Rule), state));
         foreach (EffectiveLimit limit in Limits)
             Add(limit.Limit.Rule, state => new LimitWatch(KeyOf(limit.Limit.Rule), state, limit));
-        foreach (ProbeDefinition probe in setup.Place.Probes)
-            EnsureSilence(QuantityCatalog.Get(probe.Quantity));
         if (setup.Place.Kind != PlaceKind.Site)
             Add(VouchWatch.Rule, state => new VouchWatch(KeyOf(VouchWatch.Rule), state));
+        _fixedCount = All.Count;
+        foreach (ProbeDefinition probe in setup.Place.Probes)
+            EnsureSilence(QuantityCatalog.Get(probe.Quantity));
         foreach (QuantityBook quantity in book.Of(setup.Place.Key).Quantities)
         {
             foreach (SeriesBook series in quantity.Probes)
@@ -38,7 +40,7 @@ internal sealed class RuleSet
         }
     }
 
-    /// <summary>All rules; limits stand before the rule that tells of doubts found while they are judged.</summary>
+    /// <summary>All rules: those of the set-up in its order, then those of what is published, by id, so that the order does not depend on who spoke first.</summary>
     public List<WatchedRule> All { get; } = [];
 
     /// <summary>The limits that hold here.</summary>
@@ -87,7 +89,10 @@ internal sealed class RuleSet
             return;
         WatchedRule rule = make(_remembered.Remove(id, out AlarmState? state) ? state : AlarmState.Normal);
         _byId.Add(id, rule);
-        All.Add(rule);
+        int at = _fixedCount ?? All.Count;
+        while (at < All.Count && string.CompareOrdinal(All[at].Key.Rule, id) < 0)
+            at++;
+        All.Insert(at, rule);
     }
 
     private AlarmKey KeyOf(string rule) => new(_place.Key, rule);

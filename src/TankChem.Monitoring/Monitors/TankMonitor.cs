@@ -17,6 +17,7 @@ public sealed class TankMonitor
     private static readonly TimeSpan Refresh = TimeSpan.FromMinutes(1);
 
     private readonly ReadingBook _book = new();
+    private readonly CarbonateMemo _memo = new();
     private WaterSetup _setup;
     private RuleSet _rules;
     private StateKeeping _keeping = new();
@@ -52,7 +53,7 @@ public sealed class TankMonitor
         }
 
         _rules = new RuleSet(_setup, _book, states);
-        _water = WaterStateBuilder.Build(_setup, _book, _now);
+        _water = WaterStateBuilder.Build(_setup, _book, _now, _memo);
     }
 
     /// <summary>The place as of the last step.</summary>
@@ -97,15 +98,15 @@ public sealed class TankMonitor
             };
         }
 
-        _now = now > _now ? now : _now;
         AlarmStep step = AlarmMachine.Step(rule.Settings, rule.State, AlarmEvent.Of(command.Action, command.Who, command.Reason, command.Until), now);
+        if (step.Refusal is not null)
+            return new MonitorOutcome { Refusal = step.Refusal };
+        _now = now > _now ? now : _now;
         List<KeyValuePair<AlarmKey, AlarmState>>? states = null;
         List<AlarmJournalEntry>? entries = null;
         Record(rule, step, now, command.Who, command.Reason, ref states, ref entries);
-        if (states is null)
-            return new MonitorOutcome { Refusal = step.Refusal };
         _snapshot = null;
-        return Outcome(states, entries, null, false, now) with { Refusal = step.Refusal };
+        return Outcome(states, entries, null, false, now);
     }
 
     /// <summary>Takes a changed set-up of its site or place; what it remembers stays. The next step tells what follows from it.</summary>
@@ -121,7 +122,7 @@ public sealed class TankMonitor
         _setup = new WaterSetup(site, place);
         _rules = new RuleSet(_setup, _book, states);
         _keeping = new StateKeeping();
-        _water = WaterStateBuilder.Build(_setup, _book, _now);
+        _water = WaterStateBuilder.Build(_setup, _book, _now, _memo);
         _mustCompute = true;
         _snapshot = null;
     }
@@ -156,7 +157,7 @@ public sealed class TankMonitor
         if (!due)
             return false;
         WaterAssessment before = _water;
-        _water = WaterStateBuilder.Build(_setup, _book, now);
+        _water = WaterStateBuilder.Build(_setup, _book, now, _memo);
         changed = _mustCompute || before.State.Status != _water.State.Status || before.State.Reason != _water.State.Reason || now > before.StaysUntil;
         _computedAt = now;
         _mustCompute = false;

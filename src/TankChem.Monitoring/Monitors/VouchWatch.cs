@@ -30,10 +30,10 @@ internal sealed class VouchWatch(AlarmKey key, AlarmState state) : WatchedRule(k
     public override AlarmEventKind Assess(PlaceWatch watch)
     {
         _gaps.Clear();
-        bool reports = watch.Water.State.Status != WaterStatus.None;
+        bool phIsKnown = watch.Water.State.Values.TryGetValue("ph", out WaterValue? ph) && !ph.Stale;
         foreach (KnowledgeGap gap in watch.Water.Gaps)
         {
-            if (Counts(gap, watch, reports))
+            if (Counts(gap, watch, phIsKnown))
                 _gaps.Add(gap);
         }
 
@@ -58,10 +58,11 @@ internal sealed class VouchWatch(AlarmKey key, AlarmState state) : WatchedRule(k
         return other is null ? sentence : $"{sentence} Nor for {other.Value}: {other.Text}; {Action(other)}.";
     }
 
-    // A probe that fell silent has an alarm of its own; a TAN that was never measured is named in the water state, and nags nobody.
-    private static bool Counts(KnowledgeGap gap, PlaceWatch watch, bool reports) => gap.Kind switch
+    // A probe that fell silent has an alarm of its own. What was never measured is named in the water state and nags nobody,
+    // except where pH is there to judge CO2 by and only a titration is missing.
+    private static bool Counts(KnowledgeGap gap, PlaceWatch watch, bool phIsKnown) => gap.Kind switch
     {
-        KnowledgeGapKind.NeverKnown => reports && gap.Value == "CO2" && watch.Setup.Place.Stock.Count > 0,
+        KnowledgeGapKind.NeverKnown => phIsKnown && gap.Value == "CO2" && watch.Setup.Place.Stock.Count > 0,
         KnowledgeGapKind.TooOld => !IsToldBySilence(gap.Quantity, watch),
         KnowledgeGapKind.NotUsable => true,
         KnowledgeGapKind.Impossible => true,
@@ -95,7 +96,7 @@ internal sealed class VouchWatch(AlarmKey key, AlarmState state) : WatchedRule(k
         (KnowledgeGapKind.Impossible, _) => "check the pH probe in a buffer and titrate again",
         (_, "alkalinity") => "titrate now",
         (_, "tan") => "test TAN now",
-        (_, "ph") => "check the pH probe in a buffer",
+        (_, "ph") => "measure pH now",
         _ => $"measure {gap.Quantity} now",
     };
 

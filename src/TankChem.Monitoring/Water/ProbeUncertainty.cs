@@ -11,6 +11,7 @@ public static class ProbeUncertainty
     private const double PhCalibrated = 0.05;
     private const double AlkalinityDriftPerDay = 0.2;
     private const double TanGrowthPerDay = 0.3;
+    private const double MinutesPerDay = 1440;
 
     /// <summary>Standard uncertainty, canonical unit; null where none exists (a set-point, a switch, a quantity nobody described).</summary>
     /// <param name="quantity">Quantity id.</param>
@@ -21,7 +22,9 @@ public static class ProbeUncertainty
     {
         if ((probe?.StandardUncertainty ?? Fresh(quantity, value, probe)) is not { } fresh)
             return null;
-        double days = Math.Max(0, age.TotalDays);
+
+        // Whole minutes: finer steps change no digit that is shown, and let what follows from u be reused within a minute.
+        double days = Math.Max(0, Math.Floor(age.TotalMinutes)) / MinutesPerDay;
         double drift = days * (probe?.DriftPerDay ?? DriftPerDay(quantity, value));
         return Math.Sqrt(fresh * fresh + drift * drift);
     }

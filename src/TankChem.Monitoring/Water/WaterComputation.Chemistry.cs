@@ -164,13 +164,6 @@ internal sealed partial class WaterComputation
             return;
 
         var input = new CarbonateInput { PH = _ph!.Value, AlkalinityUmolKg = alkalinityUmolKg, Scale = PhScale.Nbs };
-        CarbonateState state = CarbonateSystem.Solve(solution, input);
-        if (state.Status != SolveStatus.Solved || !double.IsFinite(state.Co2UmolKg))
-        {
-            _gaps.Add(new KnowledgeGap("CO2", "ph", KnowledgeGapKind.Impossible, state.FaultyArgument ?? "pH and alkalinity do not belong to one water"));
-            return;
-        }
-
         var uncertainty = new InputUncertainty
         {
             PH = _ph.U ?? 0,
@@ -179,7 +172,14 @@ internal sealed partial class WaterComputation
             Salinity = salt.U,
             IncludeConstants = true,
         };
-        PutCarbonates(state, CarbonateSystem.Propagate(solution, input, state, uncertainty), CarbonateGround(state.Caveats, salt, _ph), salt);
+        (CarbonateState state, CarbonateUncertainty u) = memo.Water(solution, input, uncertainty);
+        if (state.Status != SolveStatus.Solved || !double.IsFinite(state.Co2UmolKg))
+        {
+            _gaps.Add(new KnowledgeGap("CO2", "ph", KnowledgeGapKind.Impossible, state.FaultyArgument ?? "pH and alkalinity do not belong to one water"));
+            return;
+        }
+
+        PutCarbonates(state, u, CarbonateGround(state.Caveats, salt, _ph), salt);
     }
 
     private Solution MakeSolution(Salt salt, double pressureAtm, double density)
@@ -240,7 +240,7 @@ internal sealed partial class WaterComputation
     private void ComputeAir(Solution solution, double alkalinityUmolKg, Salt salt)
     {
         (double ppm, double relativeU) = FindAirCo2();
-        CarbonateState air = AtGas(solution, alkalinityUmolKg, ppm);
+        CarbonateState air = memo.Air(solution, GasInput(solution, alkalinityUmolKg, ppm));
         if (air.Status == SolveStatus.Solved)
         {
             Ground ground = CarbonateGround(air.Caveats, salt, null);
@@ -253,17 +253,17 @@ internal sealed partial class WaterComputation
 
         if (!setup.Place.Co2Injection)
             return;
-        CarbonateState injected = AtGas(solution, alkalinityUmolKg, PureGasPpm);
+        CarbonateState injected = memo.Injected(solution, GasInput(solution, alkalinityUmolKg, PureGasPpm));
         if (injected.Status == SolveStatus.Solved)
             PutComputed("ph-injected", injected.PhNbs, UncertaintyAtGas(injected, 0), CarbonateGround(injected.Caveats, salt, null));
     }
 
-    private static CarbonateState AtGas(Solution solution, double alkalinityUmolKg, double ppm) => CarbonateSystem.Solve(solution, new CarbonateInput
+    private static CarbonateInput GasInput(Solution solution, double alkalinityUmolKg, double ppm) => new()
     {
         AlkalinityUmolKg = alkalinityUmolKg,
         Pco2Uatm = Atmosphere.Pco2Uatm(ppm, solution.PressureAtm, solution.TemperatureC, solution.Salinity),
         Scale = PhScale.Nbs,
-    });
+    };
 
     /// <summary>Of the pH at a fixed pCO2: by alkalinity through the open buffer intensity, by the gas about one pH unit a decade.</summary>
     private double? UncertaintyAtGas(in CarbonateState state, double relativeGas)

@@ -4,7 +4,7 @@ using TankChem.Monitoring.Readings;
 namespace TankChem.Monitoring.Water;
 
 /// <summary>One computation of a water state: chooses inputs, then fills in what follows from them. Lives for one call.</summary>
-internal sealed partial class WaterComputation(WaterSetup setup, ReadingBook book, DateTimeOffset now)
+internal sealed partial class WaterComputation(WaterSetup setup, ReadingBook book, DateTimeOffset now, CarbonateMemo memo)
 {
     private readonly Dictionary<string, WaterValue> _values = new(32, StringComparer.Ordinal);
     private readonly List<KnowledgeGap> _gaps = [];

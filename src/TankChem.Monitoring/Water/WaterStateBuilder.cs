@@ -11,9 +11,9 @@ public static class WaterStateBuilder
     /// <param name="book">The newest readings of the place, its loop and its site.</param>
     /// <param name="now">The instant; ages and uncertainties hold for it.</param>
     public static WaterAssessment Build(SiteDefinition site, PlaceDefinition place, ReadingBook book, DateTimeOffset now) =>
-        Build(new WaterSetup(site, place), book, now);
+        Build(new WaterSetup(site, place), book, now, new CarbonateMemo());
 
-    internal static WaterAssessment Build(WaterSetup setup, ReadingBook book, DateTimeOffset now) => new WaterComputation(setup, book, now).Run();
+    internal static WaterAssessment Build(WaterSetup setup, ReadingBook book, DateTimeOffset now, CarbonateMemo memo) => new WaterComputation(setup, book, now, memo).Run();
 }
 
 /// <summary>What of the set-up matters to a water, looked up once.</summary>

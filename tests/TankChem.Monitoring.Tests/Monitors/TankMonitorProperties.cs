@@ -13,7 +13,7 @@ public sealed class TankMonitorProperties
 
     // Values wander over the limits, quantities come and go, some readings are late, some suspect, and minutes pass in silence.
     private static readonly Gen<(double Minutes, Reading[] Readings)[]> AnyHistory = Gen.Select(
-        Gen.Double[0, 6],
+        Gen.Double[0.01, 6],
         Gen.Select(Gen.Int[0, 9], Gen.Double[0, 1], Gen.Int[0, 12], (what, share, late) => (what, share, late)).Array[0, 4],
         (minutes, draws) => (minutes, draws))
         .Array[1, 60]

@@ -114,8 +114,7 @@ public sealed class TankMonitorTests
         Assert.Empty(watch.Snapshot.Alarms);
         Assert.Empty(watch.Journal);
         Assert.Equal(PlaceUrgency.Unknown, watch.Snapshot.Urgency);
-        Assert.Contains("no alarm rule", watch.Do(31, "co2-high", AlarmAction.Acknowledge).Refusal + " no alarm rule", StringComparison.Ordinal);
-        Assert.Contains("not set up yet", watch.Last.Refusal, StringComparison.Ordinal);
+        Assert.Contains("not set up yet", watch.Do(31, "co2-high", AlarmAction.Acknowledge).Refusal, StringComparison.Ordinal);
     }
 
     [Fact]
@@ -196,6 +195,36 @@ public sealed class TankMonitorTests
         Assert.True(alarm.AboutKnowledge);
         Assert.Equal("Titrate now.", alarm.FirstAction);
         Assert.Equal(PlaceUrgency.Doubt, watch.Snapshot.Urgency);
+    }
+
+    [Fact]
+    public void Advance_OnlyATemperatureProbe_NagsNobodyAboutCo2()
+    {
+        Watch watch = new Watch(Farm.Tank("reef") with { Salinity = 35 }).Every(0, 60, ("temperature", 25));
+
+        Assert.Empty(watch.Journal);
+        Assert.Equal("25.0 °C, all that is known within limits for the reef; CO2 not known (pH not known)", watch.Snapshot.Sentence);
+    }
+
+    [Fact]
+    public void Advance_PhWithoutAnyTitration_AsksForOne()
+    {
+        Watch watch = new Watch(Farm.Tank("salmonid")).Every(0, 5, ("temperature", 14), ("ph", 7.2));
+
+        Assert.Equal("Cannot vouch for CO2: alkalinity not known; titrate now.", watch.Active("cannot-vouch").Sentence);
+    }
+
+    [Fact]
+    public void Apply_RefusedCommand_ChangesNothing()
+    {
+        Watch watch = Salmonids().Every(1, 4, ("ph", 7.15));
+        PlaceSnapshot before = watch.Snapshot;
+
+        MonitorOutcome outcome = watch.Do(5, "co2-high", AlarmAction.Reset);
+
+        Assert.StartsWith("Cannot reset: its condition still holds.", outcome.Refusal, StringComparison.Ordinal);
+        Assert.Empty(outcome.AlarmStates);
+        Assert.Same(before, watch.Snapshot);
     }
 
     [Fact]
