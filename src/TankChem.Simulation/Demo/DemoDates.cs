@@ -16,8 +16,11 @@ public sealed class DemoDates
     /// <summary>End of the history.</summary>
     public DateTimeOffset HistoryEnd { get; }
 
-    /// <summary>Water exchange of the raceway is cut: nitrification begins to use its alkalinity up.</summary>
-    public DateTimeOffset RacewayExchangeCut => Day(-17, 9, 0);
+    /// <summary>Water exchange of the raceway is halved: nitrification begins to use its alkalinity up.</summary>
+    public DateTimeOffset RacewayExchangeHalved => Day(-21, 9, 0);
+
+    /// <summary>It is cut further.</summary>
+    public DateTimeOffset RacewayExchangeCut => Day(-9, 9, 30);
 
     /// <summary>The pH probe of the raceway begins to foul.</summary>
     public DateTimeOffset RacewayFoulingBegins => Day(-25, 0, 0);
@@ -58,8 +61,14 @@ public sealed class DemoDates
     /// <summary>It speaks again, in the live part.</summary>
     public DateTimeOffset ShrimpSpeaks => HistoryEnd.AddHours(3);
 
-    /// <summary>A time of day, days after the day in which the history ends (before it: negative).</summary>
-    internal DateTimeOffset Day(int days, int hour, int minute) => _today.AddDays(days).AddHours(hour).AddMinutes(minute);
+    /// <summary>The degasser trips in the live part, for the first time.</summary>
+    public DateTimeOffset FirstTrip => HistoryEnd.AddMinutes(12);
+
+    /// <summary>A time of day, UTC, counted in days from the day in which the history ends.</summary>
+    /// <param name="days">Days; negative before it.</param>
+    /// <param name="hour">Hour.</param>
+    /// <param name="minute">Minute.</param>
+    public DateTimeOffset Day(int days, int hour, int minute) => _today.AddDays(days).AddHours(hour).AddMinutes(minute);
 
     /// <summary>Days from the day in which the history ends.</summary>
     internal int DayOf(DateTimeOffset time) => (int)Math.Floor((time - _today).TotalDays);

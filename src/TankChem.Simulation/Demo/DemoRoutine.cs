@@ -121,7 +121,7 @@ internal sealed class DemoRoutine
     private IEnumerable<SimulatedEvent> DoserRefilled()
     {
         double dosed = _waters[DemoIds.Loop].Water.Ledger[WaterProcess.Dosing].Alkalinity;
-        double grams = Math.Round((dosed - _dosedMol) * MolarMass.SodiumBicarbonate, -1);
+        double grams = Math.Round((dosed - _dosedMol) * MolarMass.SodiumBicarbonate / 10) * 10;
         _dosedMol = dosed;
         return [new SimulatedLogEntry(DemoIds.Loop, SimulatedLogKind.Dose, _waters.Time, _waters.Time, "Bicarbonate doser refilled: what went in since yesterday.", DemoPeople.Late, grams, "g", "sodium-bicarbonate")];
     }

@@ -8,6 +8,7 @@ internal sealed class DemoSensors
 {
     private const string Main = "main";
     private const double HpaPerAtm = 1013.25;
+    private const int LoopEveryMinutes = 15;
 
     private readonly List<Sensor> _sensors = [];
     private readonly int _seed;
@@ -19,7 +20,7 @@ internal sealed class DemoSensors
         Add(DemoIds.Scape, "injection-on", "1", 0, 0, truth => truth.InjectionOn ? 1 : 0);
         Tank(DemoIds.Reef, oxygen: false, light: true, new ProbeDrift(dates.ReefDriftBegins, dates.ReefCalibrated, DemoStories.ReefDriftPerDay));
         Salinity(DemoIds.Reef, DemoWaters.ReefSalinity);
-        Add(DemoIds.Loop, "temperature", "Cel", 0.03, 2, truth => truth.TemperatureC);
+        Add(DemoIds.Loop, "temperature", "Cel", 0.03, 2, truth => truth.TemperatureC, LoopEveryMinutes);
         Tank(DemoIds.North1, oxygen: true, light: false);
         Tank(DemoIds.North2, oxygen: true, light: false);
         Tank(DemoIds.Raceway, oxygen: true, light: false, new ProbeFouling(dates.RacewayFoulingBegins, dates.RacewayCleaned, 0.06, 4));

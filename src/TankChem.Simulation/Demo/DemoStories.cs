@@ -6,16 +6,21 @@ namespace TankChem.Simulation.Demo;
 internal static class DemoStories
 {
     /// <summary>How fast the reef's pH probe drifts, pH a day.</summary>
-    public const double ReefDriftPerDay = -0.026;
+    public const double ReefDriftPerDay = -0.031;
 
     private const double StuckValveFlow = 1.75;
-    private const double RacewayExchangeLeft = 0.16;
+    private const double RacewayExchangeHalf = 0.5;
+    private const double RacewayExchangeLeft = 0.22;
     private const double WrongTitration = 4.2;
+
+    private static readonly TimeSpan TripLasts = TimeSpan.FromMinutes(33);
+    private static readonly TimeSpan BetweenTrips = TimeSpan.FromHours(8);
 
     public static void Plan(DemoAgenda agenda, DemoDates dates, DemoWaters waters)
     {
         StuckValve(agenda, dates, waters[DemoIds.Scape].Controls);
         DegasserFailure(agenda, dates, waters[DemoIds.Loop].Controls);
+        LiveTrip(agenda, dates.FirstTrip, waters[DemoIds.Loop].Controls);
         AlkalinityUsedUp(agenda, dates, waters[DemoIds.Raceway].Controls);
         DriftingProbe(agenda, dates, waters);
         WrongUnit(agenda, dates);
@@ -38,10 +43,7 @@ internal static class DemoStories
         agenda.Tell(new SimulatedAcknowledgement(DemoIds.Scape, "co2-high", closed.AddMinutes(1), DemoPeople.Display, "Gas shut at the bottle, air stone in, valve taken out for a look."));
         agenda.Tell(new SimulatedLogEntry(DemoIds.Scape, SimulatedLogKind.Note, closed, closed.AddMinutes(6), "Came in to fish at the surface. Gas was still bubbling: the valve had not closed at 17:30. Shut the bottle by hand.", DemoPeople.Display));
         agenda.Tell(new SimulatedLoss(DemoIds.Scape, closed.AddMinutes(10), closed.AddMinutes(16), 4, "shrimps", "On their backs at the front glass. Fish recovered within the hour.", DemoPeople.Display));
-        agenda.Plan(closed.AddMinutes(25), () =>
-        {
-            return [new SimulatedLogEntry(DemoIds.Scape, SimulatedLogKind.Note, closed.AddMinutes(25), closed.AddMinutes(25), "Grit in the seat of the valve. Cleaned, tested ten times, back on its timer.", DemoPeople.Display)];
-        });
+        agenda.Tell(new SimulatedLogEntry(DemoIds.Scape, SimulatedLogKind.Note, closed.AddMinutes(25), closed.AddMinutes(25), "Grit in the seat of the valve. Cleaned, tested ten times, back on its timer.", DemoPeople.Display));
     }
 
     private static void DegasserFailure(DemoAgenda agenda, DemoDates dates, TankControls treatment)
@@ -60,11 +62,35 @@ internal static class DemoStories
         agenda.Tell(new SimulatedLoss(DemoIds.North1, runs.AddMinutes(28), runs.AddMinutes(37), 6, "salmonids", "Dead since some hours by the look.", DemoPeople.Early));
     }
 
+    // The same fan trips again while somebody watches, and is reset before CO2 passes a limit.
+    private static void LiveTrip(DemoAgenda agenda, DateTimeOffset at, TankControls treatment)
+    {
+        agenda.Plan(at, () =>
+        {
+            treatment.DegasserOn = false;
+            return [new SimulatedDeviceState(DemoIds.Loop, "degasser", false, at)];
+        });
+        DateTimeOffset reset = at + TripLasts;
+        agenda.Plan(reset, () =>
+        {
+            treatment.DegasserOn = true;
+            LiveTrip(agenda, at + BetweenTrips, treatment);
+            return
+            [
+                new SimulatedDeviceState(DemoIds.Loop, "degasser", true, reset),
+                new SimulatedLogEntry(DemoIds.Loop, SimulatedLogKind.Note, reset, reset, "Degasser fan had tripped again, reset. Electrician is called.", DemoPeople.Late),
+            ];
+        });
+    }
+
     private static void AlkalinityUsedUp(DemoAgenda agenda, DemoDates dates, TankControls raceway)
     {
+        DateTimeOffset halved = dates.RacewayExchangeHalved;
+        agenda.Do(halved, () => raceway.ExchangeShare = RacewayExchangeHalf);
+        agenda.Tell(new SimulatedLogEntry(DemoIds.Raceway, SimulatedLogKind.Note, halved, halved.AddMinutes(4), "Make-up water halved to save heat while the heat exchanger is repaired.", DemoPeople.Late));
         DateTimeOffset cut = dates.RacewayExchangeCut;
         agenda.Do(cut, () => raceway.ExchangeShare = RacewayExchangeLeft);
-        agenda.Tell(new SimulatedLogEntry(DemoIds.Raceway, SimulatedLogKind.Note, cut, cut.AddMinutes(4), "Make-up water throttled to save heat while the heat exchanger is repaired.", DemoPeople.Late));
+        agenda.Tell(new SimulatedLogEntry(DemoIds.Raceway, SimulatedLogKind.Note, cut, cut.AddMinutes(4), "Cold night: make-up water throttled to less than half again.", DemoPeople.Late));
         DateTimeOffset cleaned = dates.RacewayCleaned;
         agenda.Tell(new SimulatedLogEntry(DemoIds.Raceway, SimulatedLogKind.Cleaning, cleaned, cleaned.AddMinutes(5), "pH probe had slime on it, wiped and rinsed.", DemoPeople.Late, Subject: "ph"));
     }

@@ -59,7 +59,7 @@ internal sealed class DemoWaters
     {
         while (Time < until)
         {
-            DateTimeOffset next = until - Time < TimeSpan.FromMinutes(5) ? until : Time.AddMinutes(5);
+            DateTimeOffset next = until - Time < VirtualTank.LongestStep ? until : Time + VirtualTank.LongestStep;
             Air air = DemoAir.At(Time);
             _loop.Advance(next, air);
             foreach ((string place, VirtualTank tank) in _tanks)
@@ -117,8 +117,8 @@ internal sealed class DemoWaters
         Water = Well with { AlkalinityMmolL = 2, Co2OverAir = 7, TanMmolL = 0.04, NitrateMmolL = 1.5 },
         Temperature = new DailyTemperature(13.2, 0.3, 17, 0.4),
         Kla20PerHour = 0.25,
-        DegasserKla20PerHour = 9,
-        Nitrification = new Nitrification { PerHour = 4.2 },
+        DegasserKla20PerHour = 9.5,
+        Nitrification = new Nitrification { PerHour = 6.5 },
         Doser = new AlkalinityDoser(2.12, 0.35),
         SourceWater = Well,
         ExchangePerDay = 0.5,
@@ -130,8 +130,8 @@ internal sealed class DemoWaters
         Water = Well with { AlkalinityMmolL = 2, Co2OverAir = 10, TanMmolL = 0.05, NitrateMmolL = 1.5 },
         Temperature = new DailyTemperature(13.2, 0.3, 17, 0.4),
         Kla20PerHour = 0.15,
-        Stock = new Stock { FeedKgPerDay = 9 * share, ProteinShare = 0.45, PeakHour = 14 },
-        Oxygen = new OxygenSupply(9.9, 5),
+        Stock = new Stock { FeedKgPerDay = 12 * share, ProteinShare = 0.45, PeakHour = 14 },
+        Oxygen = new OxygenSupply(10.6, 9),
     };
 
     private static TankSettings Raceway => new()
@@ -152,11 +152,11 @@ internal sealed class DemoWaters
         VolumeM3 = ShrimpVolumeM3,
         Water = new WaterRecipe { AlkalinityMmolL = 2.4, Salinity = ShrimpSalinity, CalciumMmolL = 6, Co2OverAir = 4, TanMmolL = 0.02, NitrateMmolL = 1 },
         Temperature = new DailyTemperature(28.4, 0.3, 17, 0.2),
-        Kla20PerHour = 2.6,
+        Kla20PerHour = 3.3,
         Stock = new Stock { FeedKgPerDay = 2.6, ProteinShare = 0.38, PeakHour = 20 },
         Plants = new Plants { PhotosynthesisMmolLH = 0.06, RespirationMmolLH = 0.012, HalfSaturationCo2MmolL = 0.01 },
         Lamp = new Lamp(new Hours(new TimeOnly(7, 0), new TimeOnly(19, 0)), 300, 2),
-        Nitrification = new Nitrification { PerHour = 0.5 },
+        Nitrification = new Nitrification { PerHour = 0.65 },
         Doser = new AlkalinityDoser(2.5, 0.2),
     };
 
@@ -165,7 +165,7 @@ internal sealed class DemoWaters
         VolumeM3 = BenchVolumeM3,
         Water = Tap with { TanMmolL = 0.01 },
         Temperature = new DailyTemperature(21.5, 0.6, 16, 0.2),
-        Kla20PerHour = 0.6,
+        Kla20PerHour = 0.8,
         Stock = new Stock { FeedKgPerDay = 0.008, ProteinShare = 0.4 },
         Nitrification = new Nitrification { PerHour = 0.4 },
         SourceWater = Tap,

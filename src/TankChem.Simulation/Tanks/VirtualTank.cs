@@ -84,7 +84,6 @@ public sealed class VirtualTank
     {
         double hours = step.TotalHours;
         double hourOfDay = Time.UtcDateTime.TimeOfDay.TotalHours;
-        Water.TemperatureC = _settings.Temperature.At(Time);
         Water.PressureAtm = air.PressureAtm;
 
         double light = Light;
@@ -111,5 +110,6 @@ public sealed class VirtualTank
         Water.Book(WaterProcess.Exchange, exchange * hours);
         Water.Book(WaterProcess.GasExchange, gas);
         Time += step;
+        Water.TemperatureC = _settings.Temperature.At(Time);
     }
 }

@@ -15,12 +15,13 @@ public sealed class WaterBody
 
     private const double RefreshTemperatureC = 0.2;
 
-    private Solution _solution;
+    private readonly Solution _solution;
     private WaterAmounts _solvedFor;
     private double _solvedAtC;
     private double _co2MmolL;
     private double _slopeDic;
     private double _slopeAlkalinity;
+    private double _pco2Uatm;
     private bool _isSolved;
 
     /// <summary>A water of a recipe.</summary>
@@ -59,9 +60,6 @@ public sealed class WaterBody
     /// <summary>Who brought it there.</summary>
     public WaterLedger Ledger { get; } = new();
 
-    /// <summary>The exact state as last solved.</summary>
-    public CarbonateState LastSolved { get; private set; }
-
     /// <summary>Dissolved CO2, mmol/L, followed to first order from the last exact solution.</summary>
     public double Co2MmolL
     {
@@ -99,39 +97,29 @@ public sealed class WaterBody
     public double Co2InEquilibriumWith(Air air)
     {
         Refresh();
-        return _co2MmolL / LastSolved.Pco2Uatm * Atmosphere.Pco2Uatm(air.Co2Ppm, air.PressureAtm, TemperatureC, Salinity);
+        return _co2MmolL / _pco2Uatm * Atmosphere.Pco2Uatm(air.Co2Ppm, air.PressureAtm, TemperatureC, Salinity);
     }
 
     /// <summary>Oxygen, mmol/L, in equilibrium with the air.</summary>
     public double SaturatedOxygenMmolL => DissolvedOxygen.SaturationMgL(TemperatureC, Salinity, PressureAtm) / Molar.Oxygen;
 
-    /// <summary>Solves the carbonate system exactly.</summary>
+    /// <summary>Solves the carbonate system exactly. To look changes nothing.</summary>
     public CarbonateState Solve()
     {
-        double density = Density.KgPerL(TemperatureC, Salinity);
-        double perKg = 1000 / density;
-        _solution = _solution with { TemperatureC = TemperatureC, PressureAtm = PressureAtm, AmmoniaUmolKg = Amounts.Tan * perKg };
-        CarbonateState state = CarbonateSystem.Solve(_solution, new CarbonateInput
+        double perKg = PerKg;
+        Solution solution = _solution with { TemperatureC = TemperatureC, PressureAtm = PressureAtm, AmmoniaUmolKg = Amounts.Tan * perKg };
+        CarbonateState state = CarbonateSystem.Solve(solution, new CarbonateInput
         {
             DicUmolKg = Amounts.Dic * perKg,
             AlkalinityUmolKg = Amounts.Alkalinity * perKg,
         });
-        if (state.Status != SolveStatus.Solved)
-        {
-            throw new InvalidOperationException(
+        return state.Status == SolveStatus.Solved
+            ? state
+            : throw new InvalidOperationException(
                 $"The virtual water left what the chemistry can solve ({state.Status}: {state.FaultyArgument}) at {Amounts}, {TemperatureC} °C, S {Salinity}. Its processes take more than it holds.");
-        }
-
-        LastSolved = state;
-        _solvedFor = Amounts;
-        _solvedAtC = TemperatureC;
-        _co2MmolL = state.Co2UmolKg / perKg;
-        _slopeDic = Math.Clamp(state.Co2UmolKg / state.DicUmolKg * state.BufferOpenUmolKg / state.BufferClosedUmolKg, 1e-6, 1);
-        double carbonateAlkalinity = (state.Hco3UmolKg + 2 * state.Co3UmolKg) / perKg;
-        _slopeAlkalinity = -_co2MmolL * (state.BufferOpenUmolKg - state.BufferClosedUmolKg) / (state.BufferClosedUmolKg * carbonateAlkalinity);
-        _isSolved = true;
-        return state;
     }
+
+    private double PerKg => 1000 / Density.KgPerL(TemperatureC, Salinity);
 
     private void Refresh()
     {
@@ -141,7 +129,20 @@ public sealed class WaterBody
             || Math.Abs(FollowedCo2 - _co2MmolL) > 4 * RefreshShare * _co2MmolL
             || Math.Abs(TemperatureC - _solvedAtC) > RefreshTemperatureC)
         {
-            Solve();
+            Follow(Solve());
         }
+    }
+
+    private void Follow(in CarbonateState state)
+    {
+        double perKg = PerKg;
+        double carbonateAlkalinity = (state.Hco3UmolKg + 2 * state.Co3UmolKg) / perKg;
+        _solvedFor = Amounts;
+        _solvedAtC = TemperatureC;
+        _pco2Uatm = state.Pco2Uatm;
+        _co2MmolL = state.Co2UmolKg / perKg;
+        _slopeDic = Math.Clamp(state.Co2UmolKg / state.DicUmolKg * state.BufferOpenUmolKg / state.BufferClosedUmolKg, 1e-6, 1);
+        _slopeAlkalinity = -_co2MmolL * (state.BufferOpenUmolKg - state.BufferClosedUmolKg) / (state.BufferClosedUmolKg * carbonateAlkalinity);
+        _isSolved = true;
     }
 }
