@@ -1,3 +1,4 @@
+using TankChem.Monitoring.Alarming;
 using TankChem.Monitoring.Places;
 using TankChem.Monitoring.Ports;
 
@@ -22,6 +23,8 @@ internal static class PlaceCheck
             return new OperationResult(false, "The volume must be more than 0, in m³ or litres.", "volume");
         if (place.Salinity is { } salinity && (!double.IsFinite(salinity) || salinity < 0 || salinity > 60))
             return new OperationResult(false, "The salinity must be between 0 and 60.", "salinity");
+        if (place.Stock.FirstOrDefault(id => StockLimits.Find(id) is null) is { } unknown)
+            return new OperationResult(false, $"\"{unknown}\" is no stock group; known are {string.Join(", ", StockLimits.Groups.Select(g => g.Id))}.", "stock");
         if (place.Loop is null)
             return null;
         if (place.Kind != PlaceKind.Tank)
