@@ -81,7 +81,7 @@ internal static class PlaceSection
         return null;
     }
 
-    private static IReadOnlyList<string> Stock(ConfigurationNode node, ConfigurationNotes notes)
+    private static List<string> Stock(ConfigurationNode node, ConfigurationNotes notes)
     {
         if (node.Element("stock") is not { } element)
             return [];

@@ -29,7 +29,12 @@ public class BodyTests
             {
                 ["co2"] = new()
                 {
-                    Value = 11.8, Unit = "mg/L", U = 1.6, Time = Now, Inputs = [new WaterInput("ph", "main", Tank, Now.AddMilliseconds(-250), 0.25)], Caveats = ["ions not known"],
+                    Value = 11.8,
+                    Unit = "mg/L",
+                    U = 1.6,
+                    Time = Now,
+                    Inputs = [new WaterInput("ph", "main", Tank, Now.AddMilliseconds(-250), 0.25)],
+                    Caveats = ["ions not known"],
                 },
             },
         };

@@ -92,7 +92,7 @@ public class ConfigurationReaderTests
     {
         string source = string.Concat(Directory.GetFiles(Path.Combine(Repository.Root, "src", "TankChem.Monitoring", "Configuration"), "*.cs").Select(File.ReadAllText));
         string document = File.ReadAllText(Path.Combine(Repository.Root, "docs", "configuration.md"));
-        var keys = System.Text.RegularExpressions.Regex.Matches(source, "(?:Text|Number|Flag|Items|Element|Has)\\(\"([a-zA-Z0-9]+)\"").Select(m => m.Groups[1].Value).Distinct();
+        var keys = System.Text.RegularExpressions.Regex.Matches(source, "(?:Text|Number|Flag|Items|Element|Has)\\(\"(?<key>[a-zA-Z0-9]+)\"", System.Text.RegularExpressions.RegexOptions.ExplicitCapture, TimeSpan.FromSeconds(5)).Select(m => m.Groups["key"].Value).Distinct();
 
         Assert.All(keys, key => Assert.Contains(key, document, StringComparison.Ordinal));
     }
