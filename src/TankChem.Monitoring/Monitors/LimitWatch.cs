@@ -48,8 +48,6 @@ internal sealed class LimitWatch : WatchedRule
 
     public override string SetBy => _limit.SetBy;
 
-    public EffectiveLimit Limit => _limit;
-
     public override AlarmEventKind Assess(PlaceWatch watch)
     {
         if (!watch.Water.State.Values.TryGetValue(_rule.Quantity, out WaterValue? value) || value.Stale)
@@ -73,7 +71,7 @@ internal sealed class LimitWatch : WatchedRule
 
     public override string Sentence(DateTimeOffset now)
     {
-        string limit = $"{LimitWord} {Number(_limit.Limit.Value, _rule.Digits)}{Unit} for {_limit.SetBy}";
+        string limit = $"{LimitWord} {Limit(_limit.Limit.Value)}{Unit} for {_limit.SetBy}";
         if (Value is not { } value)
             return IsActive ? $"{_rule.Name} was {_rule.Word} when last known, {limit}." : $"{_rule.Name} is not known, {limit}.";
         string amount = $"{Number(value, _rule.Digits)}{Unit}";
@@ -85,7 +83,7 @@ internal sealed class LimitWatch : WatchedRule
         {
             return _condition.Guard(_u) > 0
                 ? $"{_rule.Name} may be past its {LimitWord}: {Number(value, _rule.Digits)} ± {Number(_u!.Value, _rule.Digits)}{Unit}, {limit}."
-                : $"{_rule.Name} is not clear of its {LimitWord} yet: {amount}, {limit}.";
+                : $"{_rule.Name} is at its {LimitWord}: {amount}, {limit}.";
         }
 
         return $"{_rule.Name} is inside its {LimitWord}: {amount}, {limit}.";
@@ -99,7 +97,7 @@ internal sealed class LimitWatch : WatchedRule
     };
 
     private string DoubtText(WaterValue value) =>
-        $"{Number(value.Value, _rule.Digits)} ± {Number(value.U!.Value, _rule.Digits)}{Unit} may be past the {LimitWord} {Number(_limit.Limit.Value, _rule.Digits)}";
+        $"{Number(value.Value, _rule.Digits)} ± {Number(value.U!.Value, _rule.Digits)}{Unit} may be past the {LimitWord} {Limit(_limit.Limit.Value)}";
 
     /// <summary>The input whose age makes the doubt; null when all are of today, for then a new test would not lessen it.</summary>
     private static string? AgedInput(WaterValue value)

@@ -64,6 +64,7 @@ internal static class PlaceSentence
         {
             Add(parts, water, "oxygen-saturation", "oxygen ", "0", " %");
             Add(parts, water, "temperature", "", "0.0", " °C");
+            Add(parts, water, "alkalinity", "alkalinity ", "0.00", " mmol/L");
             Add(parts, water, "air-co2", "room air CO2 ", "#,0", " ppm");
         }
 
@@ -73,7 +74,7 @@ internal static class PlaceSentence
         if (parts.Count > 0 && parts[0].StartsWith("pH", StringComparison.Ordinal))
             sentence = string.Join(", ", parts);
         if (water.Gaps.Count > 0 && setup.Place.Kind != PlaceKind.Site)
-            sentence += $"; {water.Gaps[0].Value} not known ({water.Gaps[0].Text})";
+            sentence += $"; {water.Gaps[0].Value} cannot be computed: {water.Gaps[0].Text}";
         int waiting = 0;
         int kept = 0;
         foreach (AlarmView alarm in alarms)

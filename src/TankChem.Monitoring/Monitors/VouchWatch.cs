@@ -13,7 +13,11 @@ internal sealed class VouchWatch(AlarmKey key, AlarmState state) : WatchedRule(k
 
     private readonly List<KnowledgeGap> _gaps = [];
 
-    public override AlarmSettings Settings { get; } = new() { OnDelay = TimeSpan.FromMinutes(5), OffDelay = TimeSpan.Zero };
+    private static readonly AlarmSettings Usual = new() { OnDelay = TimeSpan.FromMinutes(5) };
+    private static readonly AlarmSettings BeforeFirstTest = new() { OnDelay = TimeSpan.FromDays(1) };
+
+    /// <summary>A place that was just set up gets a day for its first titration; what was known once is missed at once.</summary>
+    public override AlarmSettings Settings => _gaps.Count > 0 && _gaps.TrueForAll(gap => gap.Kind == KnowledgeGapKind.NeverKnown) ? BeforeFirstTest : Usual;
 
     public override AlarmPriority Priority => AlarmPriority.Medium;
 

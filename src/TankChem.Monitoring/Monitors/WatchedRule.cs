@@ -81,10 +81,12 @@ internal abstract class WatchedRule
     {
         0 => "#,0",
         1 => "#,0.#",
-        2 => "0.##",
-        3 => "0.###",
-        _ => "0.####",
+        2 => "0.00",
+        3 => "0.000",
+        _ => "0.0000",
     }, CultureInfo.InvariantCulture);
+
+    protected static string Limit(double value) => value.ToString("#,0.####", CultureInfo.InvariantCulture);
 }
 
 /// <summary>What the rules look at: the place's water and what was heard.</summary>

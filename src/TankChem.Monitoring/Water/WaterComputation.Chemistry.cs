@@ -23,14 +23,18 @@ internal sealed partial class WaterComputation
         bool hasAlkalinity = _alkalinity is { IsStale: false };
         bool hasPh = _ph is { IsStale: false };
 
-        if (!hasPh)
-            AddGap("CO2", "ph", "pH", _ph, own);
-        if (!hasAlkalinity)
-            AddGap("CO2", "alkalinity", "alkalinity", _alkalinity, own);
-        if (!hasTemperature)
-            AddGap("CO2", "temperature", "temperature", _temperature, own);
-        if (salt is null)
-            AddSaltGap();
+        if (Co2IsExpected(own))
+        {
+            if (!hasPh)
+                AddGap("CO2", "ph", "pH", _ph, own);
+            if (!hasAlkalinity)
+                AddGap("CO2", "alkalinity", "alkalinity", _alkalinity, own);
+            if (!hasTemperature)
+                AddGap("CO2", "temperature", "temperature", _temperature, own);
+            if (salt is null)
+                AddSaltGap();
+        }
+
         AddTanGap(own);
 
         if (!hasTemperature || salt is null)
@@ -40,6 +44,20 @@ internal sealed partial class WaterComputation
         if (!hasAlkalinity)
             return;
         ComputeCarbonates(salt, pressureAtm, hasPh);
+    }
+
+    /// <summary>A loop whose pH nobody measures has no CO2 of its own to miss: it is in its tanks. Of every tank it is asked.</summary>
+    private bool Co2IsExpected(PlaceBook own)
+    {
+        if (setup.Place.Kind == PlaceKind.Tank || own.Quantities.Count == 0 || own.Find("ph") is not null)
+            return true;
+        foreach (ProbeDefinition probe in setup.Place.Probes)
+        {
+            if (probe.Quantity == "ph")
+                return true;
+        }
+
+        return false;
     }
 
     private void AddTanGap(PlaceBook own)

@@ -203,13 +203,16 @@ public sealed class TankMonitorTests
         Watch watch = new Watch(Farm.Tank("reef") with { Salinity = 35 }).Every(0, 60, ("temperature", 25));
 
         Assert.Empty(watch.Journal);
-        Assert.Equal("25.0 °C, all that is known within limits for the reef; CO2 not known (pH not known)", watch.Snapshot.Sentence);
+        Assert.Equal("25.0 °C, all that is known within limits for the reef; CO2 cannot be computed: pH not known", watch.Snapshot.Sentence);
     }
 
     [Fact]
-    public void Advance_PhWithoutAnyTitration_AsksForOne()
+    public void Advance_PhWithoutAnyTitration_AsksForOneAfterADay()
     {
-        Watch watch = new Watch(Farm.Tank("salmonid")).Every(0, 5, ("temperature", 14), ("ph", 7.2));
+        Watch watch = new Watch(Farm.Tank("salmonid")).Every(0, 1439, ("temperature", 14), ("ph", 7.2));
+        Assert.Empty(watch.ActiveRules());
+
+        watch.At(1440, ("temperature", 14), ("ph", 7.2));
 
         Assert.Equal("Cannot vouch for CO2: alkalinity not known; titrate now.", watch.Active("cannot-vouch").Sentence);
     }
@@ -423,6 +426,15 @@ public sealed class TankMonitorTests
 
         Assert.Contains("co2-high", watch.ActiveRules());
         Assert.Single(watch.Raised(), "co2-high");
+    }
+
+    [Fact]
+    public void Loop_WithoutAPhProbe_MissesNoCo2()
+    {
+        Watch loop = new Watch(Farm.Loop, Farm.Tank("salmonid") with { Loop = "loop-a" }).At(0, ("alkalinity", 2), ("temperature", 14), ("tan", 0.3));
+
+        Assert.Equal(WaterStatus.Ok, loop.Water.Status);
+        Assert.Equal("14.0 °C, alkalinity 2.00 mmol/L, all within limits for the stock of its tanks", loop.Snapshot.Sentence);
     }
 
     [Fact]
