@@ -12,6 +12,7 @@ internal sealed class DemoRoutine
     private const double CaCO3MgPerMmol = MolarMass.CalciumCarbonate / 2;
 
     private static readonly TimeSpan WriteDown = TimeSpan.FromMinutes(7);
+    private static readonly TimeSpan FirstWriteDown = TimeSpan.FromMinutes(2);
 
     private readonly DemoAgenda _agenda;
     private readonly DemoDates _dates;
@@ -35,6 +36,19 @@ internal sealed class DemoRoutine
         PlanDay(_dates.DayOf(midnight));
         PlanFrom(midnight.AddDays(1));
     });
+
+    /// <summary>Plans one test of everything, so that a history does not begin in the dark.</summary>
+    public void PlanFirstTests(DateTimeOffset at)
+    {
+        TestAt(DemoIds.Scape, "alkalinity", "dKH", at, DemoPeople.Display, FirstWriteDown);
+        TestAt(DemoIds.Reef, "alkalinity", "dKH", at, DemoPeople.Display, FirstWriteDown);
+        TestAt(DemoIds.Reef, "calcium", "mg/L", at, DemoPeople.Display, FirstWriteDown);
+        foreach (string place in (string[])[DemoIds.Loop, DemoIds.Raceway, DemoIds.Shrimp])
+        {
+            TestAt(place, "alkalinity", "mg/L CaCO3", at, DemoPeople.Early, FirstWriteDown);
+            TestAt(place, "tan", "mg/L", at, DemoPeople.Early, FirstWriteDown);
+        }
+    }
 
     private void PlanDay(int day)
     {
@@ -92,9 +106,10 @@ internal sealed class DemoRoutine
         _agenda.Tell(new SimulatedLogEntry(DemoIds.Scape, SimulatedLogKind.Cleaning, at.AddHours(2), at.AddHours(2), "Glass and drop counter cleaned, stems cut.", DemoPeople.Display));
     }
 
-    private void Test(string place, string quantity, string unit, int day, int hour, int minute, string who)
-    {
-        DateTimeOffset drawn = _dates.Day(day, hour, minute);
+    private void Test(string place, string quantity, string unit, int day, int hour, int minute, string who) =>
+        TestAt(place, quantity, unit, _dates.Day(day, hour, minute), who, WriteDown);
+
+    private void TestAt(string place, string quantity, string unit, DateTimeOffset drawn, string who, TimeSpan writeDown) =>
         _agenda.Plan(drawn, () =>
         {
             DemoTruth truth = _truthOf(place);
@@ -106,10 +121,9 @@ internal sealed class DemoRoutine
                 "calcium" => (Math.Round(truth.CalciumMgL * error / 5) * 5, "Calcium"),
                 _ => throw new InvalidOperationException($"The demo has no test kit for {quantity}."),
             };
-            _agenda.Tell(new SimulatedLogEntry(place, SimulatedLogKind.Titration, drawn, drawn + WriteDown, what, who, typed, unit, quantity));
+            _agenda.Tell(new SimulatedLogEntry(place, SimulatedLogKind.Titration, drawn, drawn + writeDown, what, who, typed, unit, quantity));
             return [];
         });
-    }
 
     private static double Typed(double mmolL, string unit) => unit switch
     {

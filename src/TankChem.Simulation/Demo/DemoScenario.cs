@@ -20,6 +20,7 @@ public sealed class DemoScenario
     private readonly DemoAgenda _agenda = new();
     private readonly DemoWaters _waters;
     private readonly DemoSensors _sensors;
+    private readonly DemoRoutine _routine;
     private DateTimeOffset _told;
     private bool _historyBegun;
 
@@ -32,7 +33,8 @@ public sealed class DemoScenario
         _waters = new DemoWaters(start);
         _sensors = new DemoSensors(seed, Dates);
         DemoStories.Plan(_agenda, Dates, _waters);
-        new DemoRoutine(seed, _agenda, Dates, _waters, Truth).PlanFrom(start);
+        _routine = new DemoRoutine(seed, _agenda, Dates, _waters, Truth);
+        _routine.PlanFrom(start);
         _told = start;
     }
 
@@ -57,6 +59,8 @@ public sealed class DemoScenario
         if (_historyBegun)
             throw new InvalidOperationException("The history was made already; make a new scenario to make it again.");
         _historyBegun = true;
+        if (length > TimeSpan.Zero)
+            _routine.PlanFirstTests(HistoryEnd - length);
         return MakeHistory(HistoryEnd - length);
     }
 

@@ -107,6 +107,7 @@ internal static class DemoStories
         });
         DateTimeOffset calibrated = dates.ReefCalibrated;
         agenda.Tell(new SimulatedLogEntry(DemoIds.Reef, SimulatedLogKind.Calibration, calibrated, calibrated.AddMinutes(3), "Cleaned, two buffers, slope 94 %. Reads with the hand meter again.", DemoPeople.Display, Subject: "ph"));
+        agenda.Tell(new SimulatedAcknowledgement(DemoIds.Reef, "ph-low", calibrated.AddMinutes(4), DemoPeople.Display, "The probe had drifted, the water was well."));
     }
 
     private static void WrongUnit(DemoAgenda agenda, DemoDates dates)
