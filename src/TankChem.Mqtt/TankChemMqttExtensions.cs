@@ -9,6 +9,7 @@ using TankChem.Monitoring.Configuration;
 using TankChem.Monitoring.Ports;
 using TankChem.Mqtt.Broker;
 using TankChem.Mqtt.Outgoing;
+using TankChem.Mqtt.Outside;
 using TankChem.Mqtt.Payloads;
 
 namespace TankChem.Mqtt;
@@ -41,6 +42,18 @@ public static class TankChemMqttExtensions
                 p.GetRequiredService<IHostApplicationLifetime>(),
                 p.GetRequiredService<ILogger<EmbeddedBroker>>()));
             services.AddHostedService(p => p.GetRequiredService<EmbeddedBroker>());
+        }
+
+        if (settings.Outside is { } outside)
+        {
+            services.AddSingleton(p => new OutsideBroker(
+                outside,
+                settings,
+                p.GetRequiredService<MessageDoor>(),
+                p.GetRequiredService<Announcer>(),
+                p.GetRequiredService<TimeProvider>(),
+                p.GetRequiredService<ILogger<OutsideBroker>>()));
+            services.AddHostedService(p => p.GetRequiredService<OutsideBroker>());
         }
 
         return services;

@@ -36,6 +36,7 @@ public sealed partial class EmbeddedBroker : IHostedService, IDisposable
     private readonly IHostApplicationLifetime lifetime;
     private readonly ILogger<EmbeddedBroker> logger;
     private readonly MqttServer server;
+    private readonly Outbox outbox;
     private readonly ConcurrentDictionary<EndPoint, ClientConnection> connections = new();
     private readonly CancellationTokenSource stopping = new();
     private readonly Lock stopGate = new();
@@ -58,6 +59,7 @@ public sealed partial class EmbeddedBroker : IHostedService, IDisposable
             .WithMaxPendingMessagesPerClient(WaitingPerSubscriberMax)
             .WithPendingMessagesOverflowStrategy(MqttPendingMessagesOverflowStrategy.DropOldestQueuedMessage)
             .Build();
+        outbox = announcer.Open();
         server = new MqttServer(options, [handler], new MqttLog(logger));
         server.ValidatingConnectionAsync += ValidateAsync;
         server.InterceptingInboundPacketAsync += MarkInboundAsync;
@@ -76,7 +78,7 @@ public sealed partial class EmbeddedBroker : IHostedService, IDisposable
 
         // Kestrel waits for its connections to end when the host stops, and clients of a broker stay: they are sent away as soon as the stop begins.
         lifetime.ApplicationStopping.Register(() => _ = StopOnceAsync());
-        outgoing = announcer.RunAsync(announcer.Open(SendAsync), stopping.Token);
+        outgoing = announcer.RunAsync(outbox, SendAsync, stopping.Token);
     }
 
     /// <inheritdoc/>

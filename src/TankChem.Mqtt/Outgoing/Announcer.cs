@@ -24,7 +24,7 @@ public sealed partial class Announcer : IAnnouncer
     private readonly ILogger<Announcer> logger;
     private readonly ConcurrentDictionary<string, Func<OutgoingMessage>> latest = new(StringComparer.Ordinal);
     private readonly Lock gate = new();
-    private Outlet[] outlets = [];
+    private Outbox[] outboxes = [];
 
     internal Announcer(IFarm farm, MqttSettings settings, MqttCounters counters, TimeProvider clock, ILogger<Announcer> logger)
     {
@@ -60,30 +60,33 @@ public sealed partial class Announcer : IAnnouncer
     }
 
     /// <summary>Opens the way to one broker.</summary>
-    internal Outlet Open(Func<OutgoingMessage, CancellationToken, Task> send)
+    internal Outbox Open()
     {
-        var outlet = new Outlet(new Outbox(TopicsMax, counters), send);
+        var outbox = new Outbox(TopicsMax, counters);
         lock (gate)
-            outlets = [.. outlets, outlet];
-        return outlet;
+            outboxes = [.. outboxes, outbox];
+        return outbox;
     }
 
     /// <summary>Sends to one broker everything that holds now, and then what changes, until it is stopped or a message cannot be sent.</summary>
-    internal async Task RunAsync(Outlet outlet, CancellationToken cancellationToken)
+    /// <param name="outbox">What has to go there.</param>
+    /// <param name="send">Hands one message over.</param>
+    /// <param name="cancellationToken">Stops it.</param>
+    internal async Task RunAsync(Outbox outbox, Func<OutgoingMessage, CancellationToken, Task> send, CancellationToken cancellationToken)
     {
         TakeInitialStates();
         foreach ((string topic, Func<OutgoingMessage> message) in latest)
-            outlet.Outbox.Put(topic, message);
+            outbox.Put(topic, message);
         try
         {
             while (true)
             {
-                await outlet.Outbox.WaitAsync(cancellationToken);
-                while (outlet.Outbox.Take() is { } make)
+                await outbox.WaitAsync(cancellationToken);
+                while (outbox.Take() is { } make)
                 {
                     if (TryMake(make) is not { } message)
                         continue;
-                    await outlet.SendAsync(message, cancellationToken);
+                    await send(message, cancellationToken);
                     counters.CountSent();
                 }
 
@@ -143,15 +146,10 @@ public sealed partial class Announcer : IAnnouncer
     {
         OutgoingMessage Message() => make(topic);
         latest[topic] = Message;
-        foreach (Outlet outlet in outlets)
-            outlet.Outbox.Put(topic, Message);
+        foreach (Outbox outbox in outboxes)
+            outbox.Put(topic, Message);
     }
 
     [LoggerMessage(EventId = 3011, Level = LogLevel.Error, Message = "The body of an outgoing message cannot be written; it was left out")]
     private partial void LogNotWritten(Exception exception);
 }
-
-/// <summary>The way to one broker.</summary>
-/// <param name="Outbox">What still has to go there.</param>
-/// <param name="SendAsync">Hands one message over.</param>
-internal sealed record Outlet(Outbox Outbox, Func<OutgoingMessage, CancellationToken, Task> SendAsync);
