@@ -1,6 +1,8 @@
 using System.Net;
 using TankChem.Monitoring.Configuration;
 using TankChem.Service.CommandLine;
+using TankChem.Service.Demo;
+using TankChem.Simulation.Demo;
 
 namespace TankChem.Service.Hosting;
 
@@ -24,14 +26,22 @@ internal sealed record ServiceSettings
     /// <summary>What is doubtful in the configuration.</summary>
     public IReadOnlyList<ConfigurationNote> Warnings { get; init; } = [];
 
+    /// <summary>The simulated site of a demo; null otherwise.</summary>
+    public DemoScenario? Demo { get; init; }
+
     /// <summary>Settings of <c>demo</c>.</summary>
-    public static ServiceSettings ForDemo(string? data, string? http, int? mqttPort) => new()
+    public static ServiceSettings ForDemo(string? data, string? http, int? mqttPort)
     {
-        IsDemo = true,
-        DataFolder = Path.GetFullPath(data ?? "tankchem-data"),
-        Http = Loopback(http ?? DefaultHttp, "--http"),
-        Configuration = new ServiceConfiguration { EmbeddedBroker = new EmbeddedBrokerOptions { Port = mqttPort ?? 1883 } },
-    };
+        DemoScenario scenario = DemoServices.Scenario(TimeProvider.System);
+        return new ServiceSettings
+        {
+            IsDemo = true,
+            Demo = scenario,
+            DataFolder = Path.GetFullPath(data ?? "tankchem-data"),
+            Http = Loopback(http ?? DefaultHttp, "--http"),
+            Configuration = new ServiceConfiguration { Sites = [DemoSetup.Site(scenario)], EmbeddedBroker = new EmbeddedBrokerOptions { Port = mqttPort ?? 1883 } },
+        };
+    }
 
     /// <summary>Settings of <c>run</c>.</summary>
     public static ServiceSettings ForRun(FileInfo? config, string? data, string? http, int? mqttPort)

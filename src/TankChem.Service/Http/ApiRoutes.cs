@@ -1,4 +1,3 @@
-using Prometheus;
 using TankChem.Monitoring.Ports;
 
 namespace TankChem.Service.Http;
@@ -27,22 +26,6 @@ internal static class ApiRoutes
             .WithSummary("The process answers").WithTags("health").Produces<HealthSchema>();
         routes.MapGet("/health/ready", Ready)
             .WithSummary("Store, broker and writer work").WithTags("health").Produces<HealthSchema>().Produces<HealthSchema>(StatusCodes.Status503ServiceUnavailable);
-    }
-
-    /// <summary>Metrics that are counted when they are asked for.</summary>
-    public static void AddAlarmMetrics(CollectorRegistry registry, IMetricFactory metrics, IFarm farm)
-    {
-        Gauge alarms = metrics.CreateGauge("tankchem_alarms", "Alarms that are active or wait for an acknowledgement.", "priority", "acknowledged");
-        registry.AddBeforeCollectCallback(() =>
-        {
-            foreach (TankChem.Alarms.AlarmPriority priority in Enum.GetValues<TankChem.Alarms.AlarmPriority>())
-            {
-                string name = priority.ToString().ToLowerInvariant();
-                var views = farm.Places.SelectMany(p => p.Alarms).Where(a => a.Priority == priority && (a.IsActive || a.NeedsAcknowledgement)).ToArray();
-                alarms.WithLabels(name, "no").Set(views.Count(a => a.NeedsAcknowledgement));
-                alarms.WithLabels(name, "yes").Set(views.Count(a => !a.NeedsAcknowledgement));
-            }
-        });
     }
 
     private static IResult Ready(IFarm farm) =>

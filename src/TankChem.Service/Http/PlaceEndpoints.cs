@@ -1,6 +1,5 @@
 using System.Text.Json;
 using TankChem.Dosing;
-using TankChem.Monitoring.Alarming;
 using TankChem.Monitoring.Bodies;
 using TankChem.Monitoring.Places;
 using TankChem.Monitoring.Ports;

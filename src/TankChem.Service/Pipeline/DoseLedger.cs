@@ -1,6 +1,7 @@
 using TankChem.Dosing;
 using TankChem.Monitoring.Logbook;
 using TankChem.Monitoring.Places;
+using TankChem.Monitoring.Ports;
 
 namespace TankChem.Service.Pipeline;
 
@@ -10,6 +11,15 @@ internal sealed class DoseLedger
     private static readonly TimeSpan Kept = TimeSpan.FromDays(2);
     private readonly Lock gate = new();
     private readonly List<LogEntry> doses = [];
+
+    /// <summary>A ledger of what the logbook says.</summary>
+    public static DoseLedger Load(IHistory history, DateTimeOffset now)
+    {
+        var ledger = new DoseLedger();
+        foreach (LogEntry entry in history.LogAsync(null, now - Kept, now + Kept, int.MaxValue, CancellationToken.None).GetAwaiter().GetResult())
+            ledger.Take(entry);
+        return ledger;
+    }
 
     /// <summary>Takes a logbook entry; other kinds than doses are ignored.</summary>
     public void Take(LogEntry entry)

@@ -15,8 +15,21 @@ internal static class SolveCommand
             throw new UsageException($"Input and output are both {inputPath}; the input would be overwritten.");
         using TextReader input = OpenInput(inputPath);
         using TextWriter output = OpenOutput(outputPath);
-        bool all = SolveTable.Run(input, output);
-        output.Flush();
+        bool all;
+        try
+        {
+            all = SolveTable.Run(input, output);
+            output.Flush();
+        }
+        catch (DecoderFallbackException e)
+        {
+            throw new UsageException($"--input {inputPath} is not UTF-8 text: {e.Message}");
+        }
+        catch (IOException e)
+        {
+            throw new RunFailedException($"--output {outputPath} cannot be written: {e.Message}", e);
+        }
+
         if (all)
             return ExitCode.Done;
         error.WriteLine("Some rows could not be solved; the column error of each says why.");

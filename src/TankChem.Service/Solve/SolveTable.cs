@@ -8,6 +8,7 @@ namespace TankChem.Service.Solve;
 internal sealed class SolveTable
 {
     private const int Extra = -1;
+    private static readonly string[] Required = ["temperature_c", "salinity"];
     private readonly string[] header;
     private readonly int[] numberOf;
     private readonly int[] wordOf;
@@ -58,7 +59,7 @@ internal sealed class SolveTable
         string[] twice = [.. names.GroupBy(n => n, StringComparer.Ordinal).Where(g => g.Count() > 1).Select(g => g.Key)];
         if (twice.Length > 0)
             throw new UsageException([.. twice.Select(n => $"The column {n} stands in the header twice; each name may stand once.")]);
-        List<string> missing = [.. new[] { "temperature_c", "salinity" }.Where(n => !names.Contains(n, StringComparer.Ordinal)).Select(n => $"The column {n} is missing from the header.")];
+        List<string> missing = [.. Required.Where(n => !names.Contains(n, StringComparer.Ordinal)).Select(n => $"The column {n} is missing from the header.")];
         int pair = names.Count(n => n is "ph" or "alkalinity_umol_kg" or "dic_umol_kg" or "pco2_uatm");
         if (pair < 2)
             missing.Add("At least two of the columns ph, alkalinity_umol_kg, dic_umol_kg, pco2_uatm are needed.");
