@@ -1,5 +1,7 @@
+using Microsoft.AspNetCore.Builder;
 using Microsoft.AspNetCore.Routing;
 using Microsoft.Extensions.DependencyInjection;
+using TankChem.Dashboard.Components;
 
 namespace TankChem.Dashboard;
 
@@ -13,8 +15,10 @@ public static class DashboardExtensions
         return services;
     }
 
-    /// <summary>Maps the pages.</summary>
+    /// <summary>Maps the pages and their files; the host must use antiforgery.</summary>
     public static void MapTankChemDashboard(this IEndpointRouteBuilder routes)
     {
+        routes.MapStaticAssets();
+        routes.MapRazorComponents<App>().AddInteractiveServerRenderMode();
     }
 }

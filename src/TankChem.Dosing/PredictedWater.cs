@@ -1,5 +1,3 @@
-using TankChem.Chemistry;
-
 namespace TankChem.Dosing;
 
 /// <summary>What a water will be after a step.</summary>

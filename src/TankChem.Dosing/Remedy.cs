@@ -1,5 +1,3 @@
-using TankChem.Chemistry;
-
 namespace TankChem.Dosing;
 
 /// <summary>Advice that is not a reagent: gas off, more air, less feed, exchange.</summary>

@@ -1,5 +1,4 @@
 using System.Globalization;
-using TankChem.Chemistry;
 
 namespace TankChem.Dosing;
 

@@ -1,5 +1,4 @@
 using System.Text.Json;
-using TankChem.Chemistry;
 using TankChem.Dosing;
 using TankChem.Monitoring.Readings;
 

@@ -1,4 +1,4 @@
-namespace TankChem.Chemistry;
+namespace TankChem.Dosing;
 
 /// <summary>A number with its standard uncertainty (k = 1), both in the same unit.</summary>
 /// <param name="Value">The best value.</param>
