@@ -12,7 +12,7 @@ namespace TankChem.Dashboard.Components.Parts;
 /// <summary>The logbook of a place, and what can be written into it.</summary>
 public sealed partial class LogView
 {
-    private const int EntriesMax = 300;
+    private const int EntriesMax = 120;
     private static readonly LogKind[] Kinds = [LogKind.Note, LogKind.Feed, LogKind.WaterExchange, LogKind.Dose, LogKind.Cleaning, LogKind.Calibration];
 
     private static readonly QuantityDefinition[] Measurable =
