@@ -52,12 +52,13 @@ internal readonly struct FreshWater
         return speciation.State(ph);
     }
 
-    private static SolveStatus FindPH(ref Speciation speciation, in CarbonateInput input, double alkalinity, double dic, double fugacity, out double ph)
+    private SolveStatus FindPH(ref Speciation speciation, in CarbonateInput input, double alkalinity, double dic, double fugacity, out double ph)
     {
         if (input.AlkalinityUmolKg is null)
         {
             var ratio = new FugacityAt { Speciation = speciation, Dic = dic, LnTarget = Math.Log(fugacity) };
-            SolveStatus byRatio = dic > 0 ? RootFinder.TryFind(ref ratio, PHLow, PHHigh, 7, out ph) : Impossible(out ph);
+            SolveStatus byRatio = dic > 0 ? RootFinder.TryFind(ref ratio, PHLow, PHHigh, StartingPH.Ratio(dic, k.KH * fugacity, k.K1), out ph) : Impossible(out ph);
+            speciation = ratio.Speciation;
             if (byRatio == SolveStatus.Solved)
                 speciation.TryAt(ph, Known.Dic, dic);
             return byRatio;
@@ -67,7 +68,9 @@ internal readonly struct FreshWater
         double value = known == Known.Dic ? dic : fugacity;
         speciation.FixAlkalinity(alkalinity);
         var function = new AlkalinityAt { Speciation = speciation, Known = known, Value = value, Target = alkalinity };
-        SolveStatus status = RootFinder.TryFind(ref function, PHLow, PHHigh, 7.5, out ph);
+        double start = known == Known.Dic ? StartingPH.Closed(alkalinity, dic, k.K1, k.K2) : StartingPH.Open(alkalinity, k.KH * fugacity, k.K1);
+        SolveStatus status = RootFinder.TryFind(ref function, PHLow, PHHigh, start, out ph);
+        speciation = function.Speciation;
         if (status == SolveStatus.Solved)
             speciation.TryAt(ph, known, value);
         return status;
@@ -87,6 +90,8 @@ internal readonly struct FreshWater
 
     private struct AlkalinityAt : IRisingFunction
     {
+        public static bool SlopeIsExact => false;
+
         public Speciation Speciation;
         public Known Known;
         public double Value;
@@ -102,6 +107,8 @@ internal readonly struct FreshWater
 
     private struct FugacityAt : IRisingFunction
     {
+        public static bool SlopeIsExact => false;
+
         public Speciation Speciation;
         public double Dic;
         public double LnTarget;

@@ -64,11 +64,11 @@ internal readonly struct SeaWater
         if (input.DicUmolKg is not null)
         {
             var closed = new ClosedAlkalinity(this, dic, alkalinity);
-            return RootFinder.TryFind(ref closed, PHLow, PHHigh, 8, out ph);
+            return RootFinder.TryFind(ref closed, PHLow, PHHigh, StartingPH.Closed(alkalinity, dic, k.K1, k.K2), out ph);
         }
 
         var open = new OpenAlkalinity(this, co2, alkalinity);
-        return RootFinder.TryFind(ref open, PHLow, PHHigh, 8, out ph);
+        return RootFinder.TryFind(ref open, PHLow, PHHigh, StartingPH.Open(alkalinity, co2, k.K1), out ph);
     }
 
     private CarbonateState State(double ph, double h, double dic)
@@ -150,6 +150,8 @@ internal readonly struct SeaWater
 
     private readonly struct ClosedAlkalinity(SeaWater water, double dic, double target) : IRisingFunction
     {
+        public static bool SlopeIsExact => true;
+
         public double At(double x, out double slope)
         {
             double h = Math.Pow(10, -x);
@@ -163,6 +165,8 @@ internal readonly struct SeaWater
 
     private readonly struct OpenAlkalinity(SeaWater water, double co2, double target) : IRisingFunction
     {
+        public static bool SlopeIsExact => true;
+
         public double At(double x, out double slope)
         {
             double h = Math.Pow(10, -x);
