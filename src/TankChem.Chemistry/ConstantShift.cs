@@ -27,10 +27,6 @@ internal readonly record struct ConstantShift
 
     public double PKW { get; init; }
 
-    public double PKspCalcite { get; init; }
-
-    public double PKspAragonite { get; init; }
-
     public double PKNh4 { get; init; }
 
     public double BoronRelative { get; init; }

@@ -34,7 +34,7 @@ internal static class NbsBridge
     private static double LogByActivity(double tK, double s, double totalPerFree)
     {
         var debye = new DebyeHueckel(tK - 273.15);
-        double logGamma = debye.LogGamma(SeaSalt.IonicStrength(s), 1, 9.0, 0);
+        double logGamma = debye.LogGamma(SeaSalt.IonicStrength(s), Math.Sqrt(SeaSalt.IonicStrength(s)), 1, 9.0, 0);
         return logGamma - Math.Log10(SeaSalt.WaterShare(s)) - Math.Log10(totalPerFree);
     }
 }

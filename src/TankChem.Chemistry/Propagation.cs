@@ -1,10 +1,12 @@
 namespace TankChem.Chemistry;
 
-/// <summary>First-order propagation: each input and constant is moved by a small step to both sides, everything else held; contributions add in squares.</summary>
+/// <summary>First-order propagation: each input and constant is moved by a small step to both sides, everything else held (constants that only scale an answer need no step); contributions add in squares.</summary>
 internal static class Propagation
 {
     /// <summary>Small against any measurement, large against the rounding of a solved pH (1e-13): the central difference is good to about 1e-7 relative.</summary>
     private const double RelativeStep = 1e-4;
+
+    private const double Ln10 = 2.302585092994045684;
 
     public static CarbonateUncertainty Of(Solution solution, in CarbonateInput input, in CarbonateState state, in InputUncertainty u)
     {
@@ -49,13 +51,19 @@ internal static class Propagation
     private static void AddConstants(ref Squares sum, Solution solution, in CarbonateInput input)
     {
         const double e = RelativeStep;
-        Add(ref sum, solution, input, new() { PK0 = e }, new() { PK0 = -e }, ConstantShift.UPK0 / e);
+        sum.AddSolubilities(ConstantShift.UPKsp);
+        if (input.Pco2Uatm is null)
+            sum.AddHenry(ConstantShift.UPK0);
+        else
+            Add(ref sum, solution, input, new() { PK0 = e }, new() { PK0 = -e }, ConstantShift.UPK0 / e);
+        bool blended = solution.Constants == ConstantSet.Auto && Blend.ShareOfSea(solution.Salinity) is > 0 and < 1;
+        if (solution.AmmoniaUmolKg == 0 && !blended)
+            sum.AddAmmonium(ConstantShift.UPKNh4);
+        else
+            Add(ref sum, solution, input, new() { PKNh4 = e }, new() { PKNh4 = -e }, ConstantShift.UPKNh4 / e);
         Add(ref sum, solution, input, new() { PK1 = e }, new() { PK1 = -e }, ConstantShift.UPK1 / e);
         Add(ref sum, solution, input, new() { PK2 = e }, new() { PK2 = -e }, ConstantShift.UPK2 / e);
         Add(ref sum, solution, input, new() { PKW = e }, new() { PKW = -e }, ConstantShift.UPKW / e);
-        Add(ref sum, solution, input, new() { PKNh4 = e }, new() { PKNh4 = -e }, ConstantShift.UPKNh4 / e);
-        Add(ref sum, solution, input, new() { PKspCalcite = e }, new() { PKspCalcite = -e }, ConstantShift.UPKsp / e);
-        Add(ref sum, solution, input, new() { PKspAragonite = e }, new() { PKspAragonite = -e }, ConstantShift.UPKsp / e);
         if (Blend.ShareOfSea(solution.Salinity) > 0 || solution.Constants is ConstantSet.Millero2010 or ConstantSet.Waters2014 or ConstantSet.Lueker2000)
         {
             Add(ref sum, solution, input, new() { PKB = e }, new() { PKB = -e }, ConstantShift.UPKB / e);
@@ -121,6 +129,19 @@ internal static class Propagation
             calcite += Square(f * (up.OmegaCalcite - down.OmegaCalcite));
             aragonite += Square(f * (up.OmegaAragonite - down.OmegaAragonite));
         }
+
+        /// <summary>Solubility products divide the saturation states and touch nothing else.</summary>
+        public void AddSolubilities(double uPK)
+        {
+            calcite += Square(state.OmegaCalcite * Ln10 * uPK);
+            aragonite += Square(state.OmegaAragonite * Ln10 * uPK);
+        }
+
+        /// <summary>Henry's constant divides the pressure of CO2 and touches nothing else, unless that pressure is what was given.</summary>
+        public void AddHenry(double uPK) => pco2 += Square(state.Pco2Uatm * Ln10 * uPK);
+
+        /// <summary>Without ammonia in the alkalinity its constant moves only its own share f: df = −f (1 − f) ln 10 dpK.</summary>
+        public void AddAmmonium(double uPK) => nh3 += Square(state.Nh3Fraction * (1 - state.Nh3Fraction) * Ln10 * uPK);
 
         public readonly CarbonateUncertainty Root() => new()
         {

@@ -46,6 +46,12 @@ internal static class RootFinder
             if (!T.SlopeIsExact && Math.Abs(x - xBefore) < SecantStepMax)
                 slope = Secant(slope, (value - valueBefore) / (x - xBefore));
             double next = x - value / slope;
+            if (Math.Abs(next - x) <= Tolerance * Math.Max(1, Math.Abs(x)))
+            {
+                root = next;
+                return SolveStatus.Solved;
+            }
+
             if (!(next > low && next < high))
             {
                 if ((!lowHolds && !(function.At(low, out _) <= 0)) || (!highHolds && !(function.At(high, out _) >= 0)))
@@ -54,7 +60,7 @@ internal static class RootFinder
                 next = 0.5 * (low + high);
             }
 
-            if (Math.Abs(next - x) <= Tolerance * Math.Max(1, Math.Abs(x)) || next == low || next == high)
+            if (next == low || next == high)
             {
                 root = next;
                 return SolveStatus.Solved;

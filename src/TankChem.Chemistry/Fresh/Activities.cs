@@ -7,20 +7,20 @@ internal readonly struct Activities
 
     public Activities(in DebyeHueckel debye, double ionicStrength)
     {
-        double i = ionicStrength;
-        Hydrogen = Ten(debye.LogGamma(i, 1, 9.0, 0));
-        Hydroxide = Ten(debye.LogGamma(i, 1, 3.5, 0));
-        Bicarbonate = Ten(debye.LogGamma(i, 1, 5.4, 0));
-        Carbonate = Ten(debye.LogGamma(i, 4, 5.4, 0));
-        Calcium = Ten(debye.LogGamma(i, 4, 5.0, 0.165));
-        Magnesium = Ten(debye.LogGamma(i, 4, 5.5, 0.20));
-        Sodium = Ten(debye.LogGamma(i, 1, 4.0, 0.075));
-        Potassium = Ten(debye.LogGamma(i, 1, 3.5, 0.015));
-        Sulfate = Ten(debye.LogGamma(i, 4, 5.0, -0.04));
-        CalciumPair = Ten(debye.LogGamma(i, 1, 6.0, 0));
-        MagnesiumPair = Ten(debye.LogGamma(i, 1, 4.0, 0));
-        Ammonium = Ten(debye.LogGamma(i, 1, 2.5, 0));
-        LogSingle = debye.LogGammaDavies(i, 1);
+        double i = ionicStrength, root = Math.Sqrt(i);
+        Hydrogen = Ten(debye.LogGamma(i, root, 1, 9.0, 0));
+        Hydroxide = Ten(debye.LogGamma(i, root, 1, 3.5, 0));
+        Bicarbonate = Ten(debye.LogGamma(i, root, 1, 5.4, 0));
+        Carbonate = Ten(debye.LogGamma(i, root, 4, 5.4, 0));
+        Calcium = Ten(debye.LogGamma(i, root, 4, 5.0, 0.165));
+        Magnesium = Ten(debye.LogGamma(i, root, 4, 5.5, 0.20));
+        Sodium = Ten(debye.LogGamma(i, root, 1, 4.0, 0.075));
+        Potassium = Ten(debye.LogGamma(i, root, 1, 3.5, 0.015));
+        Sulfate = Ten(debye.LogGamma(i, root, 4, 5.0, -0.04));
+        CalciumPair = Ten(debye.LogGamma(i, root, 1, 6.0, 0));
+        MagnesiumPair = Ten(debye.LogGamma(i, root, 1, 4.0, 0));
+        Ammonium = Ten(debye.LogGamma(i, root, 1, 2.5, 0));
+        LogSingle = debye.LogGammaDavies(i, root, 1);
         Single = Ten(LogSingle);
         Neutral = Ten(0.1 * i);
     }

@@ -21,19 +21,14 @@ internal readonly struct DebyeHueckel
 
     /// <summary>log γ = −A z² √I/(1 + B a √I) + b I.</summary>
     /// <param name="ionicStrength">I, mol/kg.</param>
+    /// <param name="root">√I, which all species share.</param>
     /// <param name="chargeSquared">z².</param>
     /// <param name="a">Ion size, Å.</param>
     /// <param name="b">Linear term, kg/mol.</param>
-    public double LogGamma(double ionicStrength, double chargeSquared, double a, double b)
-    {
-        double root = Math.Sqrt(ionicStrength);
-        return -A * chargeSquared * root / (1 + B * a * root) + b * ionicStrength;
-    }
+    public double LogGamma(double ionicStrength, double root, double chargeSquared, double a, double b) =>
+        -A * chargeSquared * root / (1 + B * a * root) + b * ionicStrength;
 
     /// <summary>Davies 1962: log γ = −A z² (√I/(1 + √I) − 0.3 I), for ions without parameters of their own.</summary>
-    public double LogGammaDavies(double ionicStrength, double chargeSquared)
-    {
-        double root = Math.Sqrt(ionicStrength);
-        return -A * chargeSquared * (root / (1 + root) - 0.3 * ionicStrength);
-    }
+    public double LogGammaDavies(double ionicStrength, double root, double chargeSquared) =>
+        -A * chargeSquared * (root / (1 + root) - 0.3 * ionicStrength);
 }

@@ -16,8 +16,8 @@ internal readonly struct FreshConstants
         K2 = Ten(-107.8871 - 0.03252849 * tK + 5151.79 * invT + 38.92561 * logT - 563713.9 * invT2 - shift.PK2);
         KH = Ten(108.3865 + 0.01985076 * tK - 6919.53 * invT - 40.45154 * logT + 669365.0 * invT2 - shift.PK0);
         KW = Ten(-283.971 - 0.05069842 * tK + 13323.0 * invT + 102.24447 * logT - 1119669.0 * invT2 - shift.PKW);
-        KspCalcite = Ten(-171.9065 - 0.077993 * tK + 2839.319 * invT + 71.595 * logT - shift.PKspCalcite);
-        KspAragonite = Ten(-171.9773 - 0.077993 * tK + 2903.293 * invT + 71.595 * logT - shift.PKspAragonite);
+        KspCalcite = Ten(-171.9065 - 0.077993 * tK + 2839.319 * invT + 71.595 * logT);
+        KspAragonite = Ten(-171.9773 - 0.077993 * tK + 2903.293 * invT + 71.595 * logT);
         CaHco3 = Ten(1209.120 + 0.31294 * tK - 34765.05 * invT - 478.782 * logT);
         CaCo3 = Ten(-1228.732 - 0.299440 * tK + 35512.75 * invT + 485.818 * logT);
         MgHco3 = Ten(-59.215 + 2537.455 * invT + 20.92298 * logT);

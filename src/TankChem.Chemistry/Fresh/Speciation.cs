@@ -2,12 +2,19 @@ using TankChem.Chemistry.Sea;
 
 namespace TankChem.Chemistry.Fresh;
 
-/// <summary>All species of a fresh water at one pH, by successive substitution of free ions and ionic strength. It remembers its last answer as the next start.</summary>
+/// <summary>All species of a fresh water at one pH, by successive substitution of free ions inside a secant on the ionic strength, whose exponentials are dear. It remembers its last answer as the next start.</summary>
 internal struct Speciation
 {
     private const double Ln10 = 2.302585092994045684;
-    private const int IterationsMax = 200;
+    private const int IterationsMax = 100;
+    private const int SubstitutionsMax = 50;
     private const double Tolerance = 1e-14;
+
+    /// <summary>How exact, as a share of the step in ionic strength, the ions are made before the next step.</summary>
+    private const double SubstitutionShare = 1e-3;
+
+    /// <summary>Ionic strength answers its own change by far less than this in every dilute water.</summary>
+    private const double SlopeMax = 0.8;
 
     /// <summary>The activity model ends well below this; a bracket's far ends pass through it and must stay finite.</summary>
     private const double IonicStrengthMax = 2;
@@ -16,8 +23,7 @@ internal struct Speciation
     private readonly FreshConstants k;
     private readonly ConstantShift shift;
     private readonly double ammonia;
-    private readonly double phosphate;
-    private readonly double silicate;
+    private readonly Nutrients nutrients;
     private readonly bool ionsFollowAlkalinity;
     private FreshIons total;
     private bool fixedIons;
@@ -28,14 +34,14 @@ internal struct Speciation
     private double sulfate;
     private double ionicStrength;
     private Activities g;
-    private double hydrogen;
+    private ConditionalConstants c;
+    private (double Alkalinity, double Slope) nutrient;
     private double co2;
     private double hco3;
     private double co3;
     private double perHco3;
     private double perCo3;
     private double sideSlope;
-    private double nh3Fraction;
 
     public Speciation(Solution solution, in FreshConstants constants, in ConstantShift shift)
     {
@@ -43,8 +49,7 @@ internal struct Speciation
         this.shift = shift;
         k = constants;
         ammonia = solution.AmmoniaUmolKg * 1e-6;
-        phosphate = solution.PhosphateUmolKg * 1e-6;
-        silicate = solution.SilicateUmolKg * 1e-6;
+        nutrients = new Nutrients(solution);
         ionsFollowAlkalinity = FreshIons.DependsOnAlkalinity(solution);
         ionicStrength = 1e-3;
         Alkalinity = 1e-3;
@@ -103,17 +108,24 @@ internal struct Speciation
         if (known == Known.Alkalinity && !fixedIons)
             FixAlkalinity(value);
         double aH = Math.Exp(-ph * Ln10);
+        double startBefore = double.NaN, answerBefore = double.NaN;
         for (int i = 0; i < IterationsMax; i++)
         {
-            double before = ionicStrength, bicarbonateBefore = hco3;
-            g = new Activities(k.Debye, Math.Min(ionicStrength, IonicStrengthMax));
-            if (!Carbonates(aH, known, value))
+            double start = ionicStrength;
+            g = new Activities(k.Debye, Math.Min(start, IonicStrengthMax));
+            c = new ConditionalConstants(k, g, aH);
+            nutrient = nutrients.At(aH, g);
+            if (!Substitute(known, value, start))
                 return false;
-            FreeIons(aH);
-            if (ionsFollowAlkalinity && !fixedIons)
-                SetIons(Alkalinity);
-            if (Math.Abs(ionicStrength - before) <= Tolerance + 1e-13 * ionicStrength && Math.Abs(hco3 - bicarbonateBefore) <= 1e-13 * hco3)
+            double answer = ionicStrength;
+            if (Math.Abs(answer - start) <= Tolerance * (1 + 10 * answer))
                 break;
+
+            // Where the line through the last two answers meets the diagonal (Wegstein 1958), unless it is too steep to trust.
+            double slope = (answer - answerBefore) / (start - startBefore);
+            if (Math.Abs(slope) < SlopeMax)
+                ionicStrength = Math.Max((answer - slope * start) / (1 - slope), 0.5 * answer);
+            (startBefore, answerBefore) = (start, answer);
         }
 
         return true;
@@ -149,7 +161,7 @@ internal struct Speciation
             BufferOpenUmolKg = BufferOpen * 1e6,
             OmegaCalcite = activityProduct / k.KspCalcite,
             OmegaAragonite = activityProduct / k.KspAragonite,
-            Nh3Fraction = nh3Fraction,
+            Nh3Fraction = c.Nh3Fraction,
             IonicStrengthMolKg = ionicStrength,
         };
     }
@@ -175,31 +187,47 @@ internal struct Speciation
             (calcium, magnesium, sodium, potassium, sulfate) = (total.Calcium, total.Magnesium, total.Sodium, total.Potassium, total.Sulfate);
     }
 
-    private bool Carbonates(double aH, Known known, double value)
+    /// <summary>Substitutes carbonates and free ions into each other at fixed activity coefficients, as far as the step in ionic strength deserves; false when no bicarbonate is left.</summary>
+    private bool Substitute(Known known, double value, double ionicStrengthBefore)
     {
-        double r0 = aH * g.Bicarbonate / (k.K1 * g.Neutral);
-        double r2 = k.K2 * g.Bicarbonate / (aH * g.Carbonate);
-        double n1 = 1 + calcium * CaHco3 + magnesium * MgHco3 + sodium * NaHco3;
-        double n2 = 1 + calcium * CaCo3 + magnesium * MgCo3 + sodium * NaCo3;
-        hydrogen = aH / g.Hydrogen;
-        double side = Side(aH);
+        for (int i = 0; i < SubstitutionsMax; i++)
+        {
+            double strength = ionicStrength, bicarbonate = hco3;
+            if (!Carbonates(known, value))
+                return false;
+            FreeIons();
+            if (ionsFollowAlkalinity && !fixedIons)
+                SetIons(Alkalinity);
+            double tolerance = Math.Max(Tolerance, SubstitutionShare * Math.Abs(ionicStrength - ionicStrengthBefore) / ionicStrength);
+            if (Math.Abs(ionicStrength - strength) <= tolerance * ionicStrength && Math.Abs(hco3 - bicarbonate) <= tolerance * hco3)
+                break;
+        }
+
+        return true;
+    }
+
+    private bool Carbonates(Known known, double value)
+    {
+        double n1 = 1 + calcium * c.CaHco3 + magnesium * c.MgHco3 + sodium * c.NaHco3;
+        double n2 = 1 + calcium * c.CaCo3 + magnesium * c.MgCo3 + sodium * c.NaCo3;
+        double side = Side();
         switch (known)
         {
             case Known.Alkalinity:
-                hco3 = (value - side) / (n1 + 2 * r2 * n2);
+                hco3 = (value - side) / (n1 + 2 * c.Co3PerHco3 * n2);
                 if (!(hco3 >= 0))
                     return false;
                 break;
             case Known.Dic:
-                hco3 = value / (r0 + n1 + r2 * n2);
+                hco3 = value / (c.Co2PerHco3 + n1 + c.Co3PerHco3 * n2);
                 break;
             case Known.Fugacity:
-                hco3 = k.KH * value / (g.Neutral * r0);
+                hco3 = k.KH * value / (g.Neutral * c.Co2PerHco3);
                 break;
         }
 
-        co2 = r0 * hco3;
-        co3 = r2 * hco3;
+        co2 = c.Co2PerHco3 * hco3;
+        co3 = c.Co3PerHco3 * hco3;
         perHco3 = n1 * hco3;
         perCo3 = n2 * co3;
         Dic = co2 + perHco3 + perCo3;
@@ -208,59 +236,24 @@ internal struct Speciation
     }
 
     /// <summary>Alkalinity that is not carbonate; its slope −d/d ln h goes to <see cref="sideSlope"/>.</summary>
-    private double Side(double aH)
+    private double Side()
     {
-        double hydroxide = k.KW / (aH * g.Hydroxide);
-        double pairs = calcium * k.CaOh * g.Calcium / (g.CalciumPair * aH) + magnesium * k.MgOh * g.Magnesium / (g.MagnesiumPair * aH);
-        double ratio = k.KNh4 * g.Ammonium / (aH * g.Neutral);
-        nh3Fraction = ratio / (1 + ratio);
-        double nh3 = ammonia * nh3Fraction;
-        double sum = hydroxide + pairs + nh3 - hydrogen;
-        sideSlope = hydroxide + pairs + hydrogen + nh3 * (1 - nh3Fraction);
-        return phosphate > 0 || silicate > 0 ? sum + Nutrients(aH) : sum;
+        double bases = c.Hydroxide + calcium * c.CaOh + magnesium * c.MgOh;
+        double nh3 = ammonia * c.Nh3Fraction;
+        sideSlope = bases + c.Hydrogen + nh3 * (1 - c.Nh3Fraction) + nutrient.Slope;
+        return bases + nh3 - c.Hydrogen + nutrient.Alkalinity;
     }
 
-    private double Nutrients(double aH)
+    private void FreeIons()
     {
-        double tK = solution.TemperatureC + 273.15, lnT = Math.Log(tK);
-        double g2 = Math.Exp(4 * g.LogSingle * Ln10), g3 = Math.Exp(9 * g.LogSingle * Ln10);
-        double p1 = Math.Exp(SideAcids.LnKP1(tK, lnT, 0, 0)) * g.Neutral / (aH * g.Single);
-        double p2 = p1 * Math.Exp(SideAcids.LnKP2(tK, lnT, 0, 0)) * g.Single / (aH * g2);
-        double p3 = p2 * Math.Exp(SideAcids.LnKP3(tK, 0, 0)) * g2 / (aH * g3);
-        double d = 1 + p1 + p2 + p3;
-        double mean = (-1 + p2 + 2 * p3) / d;
-        double charge = (p1 + 2 * p2 + 3 * p3) / d;
-        double si = SideAcids.KSi(tK, lnT, 0, 0) * g.Neutral / (aH * g.Single);
-        double share = si / (1 + si);
-        sideSlope += phosphate * ((2 * p2 + 6 * p3) / d - mean * charge) + silicate * share * (1 - share);
-        return phosphate * mean + silicate * share;
-    }
-
-    private void FreeIons(double aH)
-    {
-        double caSo4 = k.CaSo4 * g.Calcium * g.Sulfate / g.Neutral, mgSo4 = k.MgSo4 * g.Magnesium * g.Sulfate / g.Neutral;
-        double naSo4 = k.NaSo4 * g.Sodium * g.Sulfate / g.Single, kSo4 = k.KSo4 * g.Potassium * g.Sulfate / g.Single;
-        double caOh = k.CaOh * g.Calcium / (g.CalciumPair * aH), mgOh = k.MgOh * g.Magnesium / (g.MagnesiumPair * aH);
-        sulfate = total.Sulfate / (1 + calcium * caSo4 + magnesium * mgSo4 + sodium * naSo4 + potassium * kSo4);
-        calcium = total.Calcium / (1 + hco3 * CaHco3 + co3 * CaCo3 + sulfate * caSo4 + caOh);
-        magnesium = total.Magnesium / (1 + hco3 * MgHco3 + co3 * MgCo3 + sulfate * mgSo4 + mgOh);
-        sodium = total.Sodium / (1 + hco3 * NaHco3 + co3 * NaCo3 + sulfate * naSo4);
-        potassium = total.Potassium / (1 + sulfate * kSo4);
-        double single = sodium + potassium + total.Chloride + hco3 + k.KW / (aH * g.Hydroxide) + hydrogen
-            + calcium * (hco3 * CaHco3 + caOh) + magnesium * (hco3 * MgHco3 + mgOh) + sodium * co3 * NaCo3
-            + sulfate * (sodium * naSo4 + potassium * kSo4) + ammonia * (1 - nh3Fraction);
+        sulfate = total.Sulfate / (1 + calcium * c.CaSo4 + magnesium * c.MgSo4 + sodium * c.NaSo4 + potassium * c.KSo4);
+        calcium = total.Calcium / (1 + hco3 * c.CaHco3 + co3 * c.CaCo3 + sulfate * c.CaSo4 + c.CaOh);
+        magnesium = total.Magnesium / (1 + hco3 * c.MgHco3 + co3 * c.MgCo3 + sulfate * c.MgSo4 + c.MgOh);
+        sodium = total.Sodium / (1 + hco3 * c.NaHco3 + co3 * c.NaCo3 + sulfate * c.NaSo4);
+        potassium = total.Potassium / (1 + sulfate * c.KSo4);
+        double single = sodium + potassium + total.Chloride + hco3 + c.Hydroxide + c.Hydrogen
+            + calcium * (hco3 * c.CaHco3 + c.CaOh) + magnesium * (hco3 * c.MgHco3 + c.MgOh) + sodium * co3 * c.NaCo3
+            + sulfate * (sodium * c.NaSo4 + potassium * c.KSo4) + ammonia * (1 - c.Nh3Fraction);
         ionicStrength = 0.5 * (single + 4 * (calcium + magnesium + sulfate + co3));
     }
-
-    private readonly double CaHco3 => k.CaHco3 * g.Calcium * g.Bicarbonate / g.CalciumPair;
-
-    private readonly double CaCo3 => k.CaCo3 * g.Calcium * g.Carbonate / g.Neutral;
-
-    private readonly double MgHco3 => k.MgHco3 * g.Magnesium * g.Bicarbonate / g.MagnesiumPair;
-
-    private readonly double MgCo3 => k.MgCo3 * g.Magnesium * g.Carbonate / g.Neutral;
-
-    private readonly double NaHco3 => k.NaHco3 * g.Sodium * g.Bicarbonate / g.Neutral;
-
-    private readonly double NaCo3 => k.NaCo3 * g.Sodium * g.Carbonate / g.Single;
 }

@@ -28,8 +28,8 @@ internal readonly struct SeaConstants
         KP3 = Math.Exp(SideAcids.LnKP3(tK, s, sqrtS)) * totalPerSeawater;
         KSi = SideAcids.KSi(tK, lnT, s, IonicStrength) * totalPerSeawater;
         KNh4 = Ten(-SideAcids.PKAmmonium(tK, s) - shift.PKNh4) * SeaSalt.WaterShare(s);
-        KspCalcite = CalciumCarbonateMuc83.Calcite(tK, lnT, s, sqrtS) * Ten(-shift.PKspCalcite);
-        KspAragonite = CalciumCarbonateMuc83.Aragonite(tK, lnT, s, sqrtS) * Ten(-shift.PKspAragonite);
+        KspCalcite = CalciumCarbonateMuc83.Calcite(tK, lnT, s, sqrtS);
+        KspAragonite = CalciumCarbonateMuc83.Aragonite(tK, lnT, s, sqrtS);
         LogNbsPerTotal = NbsBridge.LogActivityPerTotal(tK, s, TotalPerFree, SeawaterPerFree);
     }
 
