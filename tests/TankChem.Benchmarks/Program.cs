@@ -1,1 +1,5 @@
-return 0;
+using TankChem.Benchmarks;
+
+Console.WriteLine($"{"job",-52} {"µs",10} {"bare µs",10} {"ratio",8}");
+SolveComparison.Print();
+StoreComparison.Print();
