@@ -14,6 +14,6 @@ public static class Atmosphere
         dryMoleFractionPpm * (pressureAtm - WaterVapourWP80.PressureAtm(temperatureC + 273.15, salinity));
 
     /// <summary>Standard-atmosphere barometric pressure, atm, at an elevation in metres above the sea. Valid −500…5,000 m.</summary>
-    /// <remarks>(1 − 2.25577e-5·h)^5.25588, ISO 2533:1975 (from memory).</remarks>
+    /// <remarks>(1 − 2.25577e-5·h)^5.25588, coefficients from memory. Source: ISO75.</remarks>
     public static double PressureAtmAtElevation(double elevationM) => Math.Pow(1 - 2.25577e-5 * elevationM, 5.25588);
 }

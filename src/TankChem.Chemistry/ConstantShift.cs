@@ -1,8 +1,8 @@
 namespace TankChem.Chemistry;
 
 /// <summary>Shifts of constants, for the propagation of their published uncertainty; <c>default</c> shifts nothing.</summary>
-/// <remarks>Standard uncertainties: pK0 0.002, pK1 0.0075, pK2 0.015, pKB 0.01, pKW 0.01, pKsp 0.02, total boron 2 % after Orr, Epitalon, Dickson &amp; Gattuso 2018
-/// (Mar. Chem. 207, 84–107, table 1; from memory); pK(NH4) 0.01 is common practice, no source.</remarks>
+/// <remarks>Standard uncertainties: pK0 0.002, pK1 0.0075, pK2 0.015, pKB 0.01, pKW 0.01, pKsp 0.02, total boron 2 % after OEDG18
+/// (table 1; from memory); pK(NH4) 0.01 is common practice, no source.</remarks>
 internal readonly record struct ConstantShift
 {
     public const double UPK0 = 0.002;

@@ -1,6 +1,6 @@
 namespace TankChem.Chemistry.Fresh;
 
-/// <summary>Activity coefficients of the species at one ionic strength. Ion sizes and linear terms: TJ74; ions without them: Davies; neutral species: log γ = 0.1 I.</summary>
+/// <summary>Activity coefficients of the species at one ionic strength. Ion sizes and linear terms: TJ74; ions without them: Dav62; neutral species: log γ = 0.1 I.</summary>
 internal readonly struct Activities
 {
     private const double Ln10 = 2.302585092994045684;

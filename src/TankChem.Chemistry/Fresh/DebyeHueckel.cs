@@ -1,6 +1,6 @@
 namespace TankChem.Chemistry.Fresh;
 
-/// <summary>Activity coefficients in dilute water at one temperature. Good to I ≈ 0.5. Source: TJ74; A and B from the density and dielectric constant of water.</summary>
+/// <summary>Activity coefficients in dilute water at one temperature. Good to I ≈ 0.5. Source: TJ74; A and B from the density (FM83) and dielectric constant (MM56) of water.</summary>
 internal readonly struct DebyeHueckel
 {
     public DebyeHueckel(double tC)
@@ -28,7 +28,7 @@ internal readonly struct DebyeHueckel
     public double LogGamma(double ionicStrength, double root, double chargeSquared, double a, double b) =>
         -A * chargeSquared * root / (1 + B * a * root) + b * ionicStrength;
 
-    /// <summary>Davies 1962: log γ = −A z² (√I/(1 + √I) − 0.3 I), for ions without parameters of their own.</summary>
+    /// <summary>Dav62: log γ = −A z² (√I/(1 + √I) − 0.3 I), for ions without parameters of their own.</summary>
     public double LogGammaDavies(double ionicStrength, double root, double chargeSquared) =>
         -A * chargeSquared * (root / (1 + root) - 0.3 * ionicStrength);
 }
