@@ -6,7 +6,7 @@ namespace TankChem.TestKit;
 /// <summary>The real service as a process of its own, on free ports.</summary>
 public sealed class ServiceProcess : IAsyncDisposable
 {
-    private static readonly TimeSpan StartLongest = TimeSpan.FromSeconds(90);
+    private static readonly TimeSpan StartLongest = TimeSpan.FromSeconds(240);
     private readonly Process process;
     private readonly StringBuilder log = new();
     private readonly TaskCompletionSource ready = new(TaskCreationOptions.RunContinuationsAsynchronously);

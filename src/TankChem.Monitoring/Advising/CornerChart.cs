@@ -45,7 +45,7 @@ public sealed record CornerChart
         CornerPoint[] trail = [.. Trace(history)];
         PlaceLimit[] co2Edges = [.. place.Limits.Where(l => l.Quantity == "co2" && l.IsUpper)];
         PlaceLimit[] ammoniaEdges = [.. place.Limits.Where(l => l.Quantity == "nh3-n" && l.IsUpper)];
-        Remedy[] drawn = [.. remedies.Where(r => r.Path.Count > 1)];
+        Remedy[] drawn = [.. remedies.Where(Moves)];
         IEnumerable<double> co2Seen = [.. trail.Select(p => p.Co2MgL), .. co2Edges.Select(e => e.Value), .. now is null ? [] : new[] { now.Co2MgL }, .. drawn.SelectMany(r => r.Path).Select(p => p.Co2MgL.Value)];
         IEnumerable<double> ammoniaSeen = [.. trail.Select(p => p.Nh3NMgL), .. ammoniaEdges.Select(e => e.Value), .. now is null ? [] : new[] { now.Nh3NMgL }, .. drawn.SelectMany(r => r.Path).Select(p => p.Nh3NMgL?.Value ?? double.NaN)];
         return new CornerChart
@@ -60,6 +60,10 @@ public sealed record CornerChart
             Strips = now is null ? [.. place.Limits.Select(l => RoomStrip.Of(place, l)).OfType<RoomStrip>()] : [],
         };
     }
+
+    /// <summary>A remedy that changes CO2 by less than its uncertainty has no way to draw.</summary>
+    private static bool Moves(Remedy remedy) =>
+        remedy.Path.Count > 1 && Math.Abs(remedy.Path[^1].Co2MgL.Value - remedy.Path[0].Co2MgL.Value) > remedy.Path[0].Co2MgL.StandardUncertainty;
 
     private static WaterValue? Known(PlaceSnapshot place, string quantity) =>
         place.Water.Values.TryGetValue(quantity, out WaterValue? value) && !value.Stale && value.Value > 0 ? value : null;

@@ -153,23 +153,42 @@ internal sealed class FarmEngine
     /// <summary>Takes a changed set-up; it is kept on disk with the next commit.</summary>
     public void SetUp(PlaceDefinition definition)
     {
-        SiteDefinition site = FindOrAddSite(definition.Key.Site);
         batch.Places.Add(definition);
         PlaceRuntime? place = Find(definition.Key);
+        bool sameSources = place is not null && place.Definition.Loop == definition.Loop && place.Definition.Kind == definition.Kind;
+        SiteDefinition site = Include(definition);
         if (place is null)
         {
             AddRuntime(site, definition, recovery.LoadLatestReadings(), []);
-            return;
+        }
+        else
+        {
+            place.Definition = definition;
+            if (!sameSources)
+                place.Monitor = NewMonitor(site, definition, recovery.LoadLatestReadings(), recovery.LoadAlarmStates());
         }
 
-        bool sameSources = place.Definition.Loop == definition.Loop && place.Definition.Kind == definition.Kind;
-        place.Definition = definition;
-        if (sameSources)
-            place.Monitor.Reconfigure(site, definition);
-        else
-            place.Monitor = NewMonitor(site, definition, recovery.LoadLatestReadings(), recovery.LoadAlarmStates());
-        touched.Add(place);
-        toTell.Add(place);
+        // A loop's tanks look at its name, ions and probes, and a loop at its tanks' limits: the whole site learns of the change.
+        foreach (PlaceRuntime other in places.Values)
+        {
+            if (other.Definition.Key.Site != site.Id)
+                continue;
+            other.Site = site;
+            other.Monitor.Reconfigure(site, other.Definition);
+            touched.Add(other);
+            toTell.Add(other);
+        }
+    }
+
+    /// <summary>The site with a place as it is set up now.</summary>
+    private SiteDefinition Include(PlaceDefinition definition)
+    {
+        SiteDefinition site = FindOrAddSite(definition.Key.Site);
+        if (definition.Kind == PlaceKind.Site || !definition.Assigned)
+            return site;
+        site = site with { Places = [.. site.Places.Where(p => p.Key != definition.Key), definition] };
+        sites[site.Id] = site;
+        return site;
     }
 
     private void Restore()
@@ -183,6 +202,8 @@ internal sealed class FarmEngine
             known.TryAdd(reading.Series.Place, NotAssigned(reading.Series.Place));
         foreach (SiteDefinition site in sites.Values.ToArray())
             known.TryAdd(new PlaceKey(site.Id, PlaceKey.WholeSite), WholeSite(site));
+        foreach (PlaceDefinition definition in known.Values)
+            Include(definition);
         foreach (PlaceDefinition definition in known.Values)
             AddRuntime(FindOrAddSite(definition.Key.Site), definition, remembered, alarms);
     }
