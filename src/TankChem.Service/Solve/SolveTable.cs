@@ -1,5 +1,4 @@
 using nietras.SeparatedValues;
-using TankChem.Chemistry;
 using TankChem.Service.CommandLine;
 
 namespace TankChem.Service.Solve;
@@ -7,14 +6,12 @@ namespace TankChem.Service.Solve;
 /// <summary>Solves a CSV table: a row in, a row out, in the same order.</summary>
 internal sealed class SolveTable
 {
-    private const int Extra = -1;
     private static readonly string[] Required = ["temperature_c", "salinity"];
     private readonly string[] header;
     private readonly int[] numberOf;
     private readonly int[] wordOf;
     private readonly int[] answerOf;
     private readonly List<int> appended = [];
-    private readonly SolveRow row = new();
 
     private SolveTable(string[] header)
     {
@@ -71,22 +68,17 @@ internal sealed class SolveTable
     {
         WriteHeader(output);
         bool allSolved = true;
-        foreach (SepReader.Row cells in reader)
-        {
-            row.Clear();
-            int count = Math.Min(cells.ColCount, header.Length);
-            for (int i = 0; i < count; i++)
-            {
-                if (numberOf[i] >= 0)
-                    row.SetNumber(numberOf[i], cells[i].Span);
-                else if (wordOf[i] >= 0)
-                    row.SetWord(wordOf[i], cells[i].Span);
-            }
 
-            row.Solve();
-            allSolved &= row.Error.Length == 0;
-            WriteRow(cells, count, output);
+        // Rows are solved on all cores and written in their order.
+        using var workers = new ThreadLocal<SolveWorker>(() => new SolveWorker(this), trackAllValues: true);
+        foreach ((string line, bool solved) in reader.ParallelEnumerate(cells => workers.Value!.Solve(cells)))
+        {
+            output.Write(line);
+            allSolved &= solved;
         }
+
+        foreach (SolveWorker worker in workers.Values)
+            worker.Dispose();
 
         return allSolved;
     }
@@ -109,79 +101,6 @@ internal sealed class SolveTable
         output.Write("\r\n");
     }
 
-    private void WriteRow(SepReader.Row cells, int count, TextWriter output)
-    {
-        for (int i = 0; i < header.Length; i++)
-        {
-            if (i > 0)
-                output.Write(',');
-            ReadOnlySpan<char> given = i < count ? cells[i].Span : default;
-            if (given.Trim().IsEmpty && answerOf[i] != Extra)
-                WriteAnswer(answerOf[i], output);
-            else if (given.Trim().IsEmpty && numberOf[i] == Array.IndexOf(SolveColumns.Numbers, "ph"))
-                WriteSolvedPh(output);
-            else
-                CsvCell.Write(output, given);
-        }
-
-        foreach (int answer in appended)
-        {
-            output.Write(',');
-            WriteAnswer(answer, output);
-        }
-
-        output.Write("\r\n");
-    }
-
-    private void WriteSolvedPh(TextWriter output)
-    {
-        if (row.Error.Length == 0)
-            CsvCell.Write(output, OnScale(row.State));
-    }
-
-    private double OnScale(in CarbonateState state) => row.Scale switch
-    {
-        PhScale.Nbs => state.PhNbs,
-        PhScale.Total => state.PhTotal,
-        PhScale.Seawater => state.PhSeawater,
-        PhScale.Free => state.PhFree,
-    };
-
-    private void WriteAnswer(int answer, TextWriter output)
-    {
-        if (answer == SolveColumns.Answers.Length - 1)
-        {
-            CsvCell.Write(output, row.Error);
-            return;
-        }
-
-        if (row.Error.Length > 0)
-            return;
-        CarbonateState s = row.State;
-        CsvCell.Write(output, answer switch
-        {
-            0 => s.PhTotal,
-            1 => s.PhNbs,
-            2 => s.AlkalinityUmolKg,
-            3 => s.DicUmolKg,
-            4 => s.Co2UmolKg,
-            5 => s.Co2MgL,
-            6 => s.Hco3UmolKg,
-            7 => s.Co3UmolKg,
-            8 => s.Pco2Uatm,
-            9 => s.Fco2Uatm,
-            10 => row.Air is { } air ? OnScale(air) : double.NaN,
-            11 => row.Air?.Co2MgL ?? double.NaN,
-            12 => s.BufferClosedUmolKg,
-            13 => s.BufferOpenUmolKg,
-            14 => s.OmegaCalcite,
-            15 => s.OmegaAragonite,
-            16 => s.Nh3Fraction,
-            17 => s.IonicStrengthMolKg,
-            18 => row.Uncertainty?.Co2MgL ?? double.NaN,
-            19 => row.Uncertainty?.Pco2Uatm ?? double.NaN,
-            20 => row.Uncertainty?.PhNbs ?? double.NaN,
-            _ => throw new ArgumentOutOfRangeException(nameof(answer), answer, "Not a column of the answer."),
-        });
-    }
+    /// <summary>What the columns of the input are, for the workers.</summary>
+    internal SolveLayout Layout => new(header.Length, numberOf, wordOf, answerOf, appended);
 }
