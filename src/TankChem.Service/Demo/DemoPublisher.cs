@@ -14,13 +14,16 @@ using TankChem.Simulation.Demo;
 namespace TankChem.Service.Demo;
 
 /// <summary>Lets the simulated site live: its probes publish over real MQTT, its people write in the logbook.</summary>
-internal sealed class DemoPublisher(DemoScenario scenario, EmbeddedBroker broker, IOperations operations, IFarm farm, TimeProvider clock, ILogger<DemoPublisher> logger) : BackgroundService
+internal sealed class DemoPublisher(DemoScenario scenario, EmbeddedBroker broker, IOperations operations, IFarm farm, TimeProvider clock, IHostApplicationLifetime lifetime, ILogger<DemoPublisher> logger) : BackgroundService
 {
     private static readonly TimeSpan Every = TimeSpan.FromSeconds(1);
     private static readonly TimeSpan RetryAfter = TimeSpan.FromSeconds(5);
 
     protected override async Task ExecuteAsync(CancellationToken stoppingToken)
     {
+        var started = new TaskCompletionSource(TaskCreationOptions.RunContinuationsAsynchronously);
+        using CancellationTokenRegistration whenStarted = lifetime.ApplicationStarted.Register(started.SetResult);
+        await started.Task.WaitAsync(stoppingToken);
         using IMqttClient client = new MqttClientFactory().CreateMqttClient();
         using var timer = new PeriodicTimer(Every, clock);
         while (await timer.WaitForNextTickAsync(stoppingToken))
@@ -29,8 +32,6 @@ internal sealed class DemoPublisher(DemoScenario scenario, EmbeddedBroker broker
             {
                 if (!client.IsConnected)
                 {
-                    if (broker.Port == 0)
-                        continue;
                     await client.ConnectAsync(new MqttClientOptionsBuilder().WithTcpServer("127.0.0.1", broker.Port).WithClientId("demo-site").Build(), stoppingToken);
                 }
 
