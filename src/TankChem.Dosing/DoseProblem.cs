@@ -20,4 +20,13 @@ public sealed record DoseProblem
 
     /// <summary>Largest rise of alkalinity a day, mmol/L (common practice, no source: 50 mg/L as CaCO3 for fish).</summary>
     public double DayMmolLMax { get; init; } = 1.0;
+
+    /// <summary>Relative standard uncertainty of the volume (common practice, no source: 5 %; gravel, pipes and the true level are rarely measured).</summary>
+    public double VolumeRelativeU { get; init; } = 0.05;
+
+    /// <summary>Exchange rate of CO2 under strong aeration, 1/h (common practice, no source: diffused air in tanks 1–4 an hour).</summary>
+    public double StripPerHour { get; init; } = 2;
+
+    /// <summary>Exchange rate of CO2 with nothing but the surface as it is, 1/h (common practice, no source).</summary>
+    public double IdlePerHour { get; init; } = 0.3;
 }

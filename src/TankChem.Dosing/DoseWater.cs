@@ -11,6 +11,9 @@ public sealed record DoseWater
     /// <summary>Temperature, salinity, ions, pressure.</summary>
     public required Solution Solution { get; init; }
 
+    /// <summary>Standard uncertainty of the temperature, °C.</summary>
+    public double TemperatureU { get; init; } = 0.2;
+
     /// <summary>pH, NBS.</summary>
     public required Estimate PH { get; init; }
 
@@ -26,9 +29,12 @@ public sealed record DoseWater
     /// <summary>Its limits, strictest of its stock groups.</summary>
     public required IReadOnlyList<DoseLimit> Limits { get; init; }
 
-    /// <summary>Largest rise of pH an hour that a dose may cause.</summary>
+    /// <summary>Largest rise of pH an hour that a dose may cause (common practice, no source: 0.2 for fish).</summary>
     public double PhRisePerHourMax { get; init; } = 0.2;
 
-    /// <summary>Whether plants or corals use up TAN so that it is normally not measured there (planted, reef): then it is asked for, not assumed.</summary>
+    /// <summary>Largest rise of pH a day that a dose may cause (common practice, no source: 0.5 for fish, 0.3 for early stages and sea life).</summary>
+    public double PhRisePerDayMax { get; init; } = 0.5;
+
+    /// <summary>Whether a plan needs to know total ammonia. False only where plants or corals use it up, so that nobody measures it (planted, reef): the plan then says so in its cautions.</summary>
     public bool AmmoniaMatters { get; init; } = true;
 }

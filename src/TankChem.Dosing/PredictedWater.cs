@@ -7,4 +7,5 @@ namespace TankChem.Dosing;
 /// <param name="Nh3NMgL">Un-ionised ammonia, mg/L as N; null when TAN is not known.</param>
 /// <param name="AlkalinityMmolL">Alkalinity, mmol/L.</param>
 /// <param name="OmegaCalcite">Saturation state of calcite; null where calcium is not known.</param>
-public sealed record PredictedWater(string Place, Estimate PH, Estimate Co2MgL, Estimate? Nh3NMgL, Estimate AlkalinityMmolL, double? OmegaCalcite);
+/// <param name="OmegaAragonite">Saturation state of aragonite; null where calcium is not known.</param>
+public sealed record PredictedWater(string Place, Estimate PH, Estimate Co2MgL, Estimate? Nh3NMgL, Estimate AlkalinityMmolL, double? OmegaCalcite, double? OmegaAragonite = null);

@@ -57,7 +57,7 @@ public sealed record CornerChart
             Remedies = drawn,
             Co2Range = Range(co2Seen, (1, 40)),
             AmmoniaRange = Range(ammoniaSeen, (0.001, 0.1)),
-            Strips = now is null ? [.. place.Limits.Select(l => RoomStrip.Of(place, l)).OfType<RoomStrip>()] : [],
+            Strips = now is null ? [.. place.Limits.Select(l => RoomStrip.Of(place, l, drawn)).OfType<RoomStrip>()] : [],
         };
     }
 

@@ -25,7 +25,8 @@ internal static class PlaceLimits
                 limit.Limit.Side == LimitSide.High,
                 limit.Limit.Value,
                 limit.Limit.Level != LimitLevel.Warn,
-                $"{rule.Name} {word} {number}{rule.Unit} for {limit.SetBy}"));
+                $"{rule.Name} {word} {number}{rule.Unit} for {limit.SetBy}",
+                limit.Limit.Level == LimitLevel.Danger));
         }
 
         return all;

@@ -61,4 +61,5 @@ public enum PlaceUrgency
 /// <param name="Value">Canonical unit.</param>
 /// <param name="IsUrgent">True for the urgent limit, false for the warning.</param>
 /// <param name="Text">In words: value, stock group.</param>
-public sealed record PlaceLimit(string Quantity, bool IsUpper, double Value, bool IsUrgent, string Text);
+/// <param name="IsDanger">True for the danger limit: beyond it stock dies. A danger limit is urgent too.</param>
+public sealed record PlaceLimit(string Quantity, bool IsUpper, double Value, bool IsUrgent, string Text, bool IsDanger = false);
