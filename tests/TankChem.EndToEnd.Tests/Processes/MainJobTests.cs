@@ -39,7 +39,7 @@ public sealed class MainJobTests : IDisposable
             TimeSpan.FromSeconds(20),
             async () =>
             {
-                await Mosquitto.PublishAsync(broker.Port, "tankchem/in/farm/hello/ph", "7");
+                await Mosquitto.PublishAsync(broker.Port, "tankchem/in/mill-pond/hello/ph", "7");
                 return await service.Http.GetStringAsync("/api/v1/places");
             },
             places => places.Contains("\"hello\"", StringComparison.Ordinal));
@@ -53,7 +53,7 @@ public sealed class MainJobTests : IDisposable
     {
         await using ServiceProcess service = await ServiceProcess.StartAsync("run", data.FullName, "--config", Configuration([.. ReferenceWater.Fresh(1)], ""));
 
-        using JsonDocument water = JsonDocument.Parse(await service.Http.GetStringAsync("/api/v1/places/farm/fresh-0/water"));
+        using JsonDocument water = JsonDocument.Parse(await service.Http.GetStringAsync("/api/v1/places/mill-pond/fresh-0/water"));
 
         Assert.Equal("none", water.RootElement.GetProperty("status").GetString());
         Assert.Empty(water.RootElement.GetProperty("values").EnumerateObject());
@@ -62,13 +62,13 @@ public sealed class MainJobTests : IDisposable
     private static async Task CheckAsync(ServiceProcess service, int port, ReferenceWater water)
     {
         foreach ((string quantity, string payload) in water.Readings)
-            await Mosquitto.PublishAsync(port, $"tankchem/in/farm/{water.Id}/{quantity}", payload);
+            await Mosquitto.PublishAsync(port, $"tankchem/in/mill-pond/{water.Id}/{quantity}", payload);
 
         double co2 = await Deadline.UntilAsync(
             Within,
             async () =>
             {
-                using JsonDocument body = JsonDocument.Parse(await service.Http.GetStringAsync($"/api/v1/places/farm/{water.Id}/water"));
+                using JsonDocument body = JsonDocument.Parse(await service.Http.GetStringAsync($"/api/v1/places/mill-pond/{water.Id}/water"));
                 return body.RootElement.GetProperty("values").TryGetProperty("co2", out JsonElement value) ? value.GetProperty("value").GetDouble() : double.NaN;
             },
             seen => !double.IsNaN(seen));
@@ -79,7 +79,7 @@ public sealed class MainJobTests : IDisposable
     private string Configuration(IEnumerable<ReferenceWater> waters, string more)
     {
         string file = data.File("config.json");
-        File.WriteAllText(file, $$"""{ "sites": [ { "id": "farm", "name": "Farm", "tanks": [ {{string.Join(", ", waters.Select(w => w.Configuration))}} ] } ]{{more}} }""");
+        File.WriteAllText(file, $$"""{ "sites": [ { "id": "mill-pond", "name": "Mill pond", "tanks": [ {{string.Join(", ", waters.Select(w => w.Configuration))}} ] } ]{{more}} }""");
         return file;
     }
 }

@@ -55,7 +55,7 @@ public sealed class PowerCutTests : IDisposable
                 double value = 6 + i % 200 / 100.0;
                 byte[] payload = Encoding.UTF8.GetBytes(string.Create(CultureInfo.InvariantCulture, $$"""{"value":{{value}},"time":"{{time:yyyy-MM-dd'T'HH:mm:ss'Z'}}"}"""));
                 MqttClientPublishResult result = await client.PublishAsync(
-                    new MqttApplicationMessageBuilder().WithTopic($"tankchem/in/farm/tank-{number}/ph").WithPayload(payload).WithQualityOfServiceLevel(MqttQualityOfServiceLevel.AtLeastOnce).Build());
+                    new MqttApplicationMessageBuilder().WithTopic($"tankchem/in/mill-pond/tank-{number}/ph").WithPayload(payload).WithQualityOfServiceLevel(MqttQualityOfServiceLevel.AtLeastOnce).Build());
                 if (result.IsSuccess)
                     acknowledged[(number, time)] = value;
             }
@@ -70,7 +70,7 @@ public sealed class PowerCutTests : IDisposable
     private static async Task<List<(DateTimeOffset, double)>> ReadAllAsync(ServiceProcess service, int client)
     {
         var readings = new List<(DateTimeOffset, double)>();
-        string? next = $"/api/v1/places/farm/tank-{client}/readings?quantity=ph&from=2026-04-30T00:00:00Z&to=2026-06-01T00:00:00Z&limit=500";
+        string? next = $"/api/v1/places/mill-pond/tank-{client}/readings?quantity=ph&from=2026-04-30T00:00:00Z&to=2026-06-01T00:00:00Z&limit=500";
         while (next is not null)
         {
             using JsonDocument page = JsonDocument.Parse(await service.Http.GetStringAsync(next));
