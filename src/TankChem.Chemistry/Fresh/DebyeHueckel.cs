@@ -31,4 +31,18 @@ internal readonly struct DebyeHueckel
     /// <summary>Dav62: log γ = −A z² (√I/(1 + √I) − 0.3 I), for ions without parameters of their own.</summary>
     public double LogGammaDavies(double ionicStrength, double root, double chargeSquared) =>
         -A * chargeSquared * (root / (1 + root) - 0.3 * ionicStrength);
+
+    /// <summary>d log γ/dI of <see cref="LogGamma"/>, kg/mol.</summary>
+    public double LogGammaSlope(double root, double chargeSquared, double a, double b)
+    {
+        double d = 1 + B * a * root;
+        return -A * chargeSquared / (2 * root * d * d) + b;
+    }
+
+    /// <summary>d log γ/dI of <see cref="LogGammaDavies"/>, kg/mol.</summary>
+    public double LogGammaDaviesSlope(double root, double chargeSquared)
+    {
+        double d = 1 + root;
+        return -A * chargeSquared * (1 / (2 * root * d * d) - 0.3);
+    }
 }

@@ -100,7 +100,7 @@ internal readonly struct FreshWater
         public double At(double x, out double slope)
         {
             Speciation.TryAt(x, Known, Value);
-            slope = Known == Known.Dic ? Speciation.BufferClosed : Speciation.BufferOpen;
+            slope = Known == Known.Dic ? Speciation.AlkalinityRiseClosed : Speciation.AlkalinityRiseOpen;
             return Speciation.Alkalinity - Target;
         }
     }

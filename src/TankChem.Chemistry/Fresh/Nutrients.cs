@@ -44,4 +44,21 @@ internal readonly struct Nutrients
         double slope = phosphate * ((2 * p2 + 6 * p3) / d - mean * charge) + silicate * share * (1 - share);
         return (phosphate * mean + silicate * share, slope);
     }
+
+    /// <summary>d alkalinity/d I at constant pH, dimensionless.</summary>
+    public double ByIonicStrength(double aH, in Activities g, in ActivitySlopes slope)
+    {
+        if (!(phosphate > 0 || silicate > 0))
+            return 0;
+        double g2 = Math.Exp(4 * g.LogSingle * Ln10), g3 = Math.Exp(9 * g.LogSingle * Ln10);
+        double p1 = kP1 * g.Neutral / (aH * g.Single);
+        double p2 = p1 * kP2 * g.Single / (aH * g2);
+        double p3 = p2 * kP3 * g2 / (aH * g3);
+        double d = 1 + p1 + p2 + p3;
+        double mean = (-1 + p2 + 2 * p3) / d;
+        double l1 = slope.Neutral - slope.Single, l2 = slope.Neutral - 4 * slope.Single, l3 = slope.Neutral - 9 * slope.Single;
+        double si = kSi * g.Neutral / (aH * g.Single);
+        double share = si / (1 + si);
+        return phosphate * ((p2 * l2 + 2 * p3 * l3) / d - mean * (p1 * l1 + p2 * l2 + p3 * l3) / d) + silicate * share * (1 - share) * l1;
+    }
 }

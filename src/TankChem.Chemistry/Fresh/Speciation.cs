@@ -65,8 +65,8 @@ internal struct Speciation
     /// <summary>Fugacity of CO2 of the last answer, atm.</summary>
     public readonly double Fugacity => co2 * g.Neutral / k.KH;
 
-    /// <summary>d alkalinity/d pH at constant DIC, mol/kg.</summary>
-    public readonly double BufferClosed
+    /// <summary>d alkalinity/d pH at constant DIC with the free ions held, mol/kg: near enough for the next step of a search.</summary>
+    public readonly double AlkalinityRiseClosed
     {
         get
         {
@@ -76,8 +76,8 @@ internal struct Speciation
         }
     }
 
-    /// <summary>d alkalinity/d pH at constant pCO2, mol/kg.</summary>
-    public readonly double BufferOpen => Ln10 * (perHco3 + 4 * perCo3 + sideSlope);
+    /// <summary>d alkalinity/d pH at constant pCO2 with the free ions held, mol/kg: near enough for the next step of a search.</summary>
+    public readonly double AlkalinityRiseOpen => Ln10 * (perHco3 + 4 * perCo3 + sideSlope);
 
     /// <summary>−d ln fugacity/d pH at constant DIC.</summary>
     public readonly double LnFugacityFall => Ln10 * (1 - (co2 - perCo3) / (co2 + perHco3 + perCo3));
@@ -131,9 +131,60 @@ internal struct Speciation
         return true;
     }
 
+    /// <summary>Derivatives at the last answer, amounts of ions held.</summary>
+    public readonly CarbonateSlopes Slopes(double ph)
+    {
+        var w = ionicStrength < IonicStrengthMax ? new ActivitySlopes(k.Debye, ionicStrength) : default;
+        var slopes = default(SpeciationSlopes);
+        slopes.Add(co2, new Change(0, 1, 0, -w.Neutral), 0, 0, 1);
+        slopes.Add(hco3, new Change(-1, 1, 0, -w.Bicarbonate), 1, 1, 1);
+        slopes.Add(co3, new Change(-2, 1, 0, -w.Carbonate), 4, 2, 1);
+        slopes.Add(c.Hydroxide, new Change(-1, 0, 0, -w.Hydroxide), 1, 1, 0);
+        slopes.Add(c.Hydrogen, new Change(1, 0, 0, -w.Hydrogen), 1, -1, 0);
+        slopes.AddSulfate(sulfate);
+        Change nh3 = ammonia * c.Nh3Fraction * (1 - c.Nh3Fraction) * new Change(-1, 0, 0, w.Ammonium - w.Neutral);
+        slopes.AddAlkalinity(nh3);
+        slopes.Add(-1, nh3, 1, 0, 0);
+        slopes.AddAlkalinity(new Change(-nutrient.Slope, 0, 0, nutrients.ByIonicStrength(Math.Exp(-ph * Ln10), g, w)));
+        slopes.AddMetal(
+            total.Calcium,
+            calcium,
+            4,
+            new MetalPair(calcium * hco3 * c.CaHco3, new Change(-1, 1, 0, w.Calcium - w.CalciumPair), 1),
+            new MetalPair(calcium * co3 * c.CaCo3, new Change(-2, 1, 0, w.Calcium - w.Neutral), 0),
+            new MetalPair(calcium * sulfate * c.CaSo4, new Change(0, 0, 1, w.Calcium + w.Sulfate - w.Neutral), 0),
+            new MetalPair(calcium * c.CaOh, new Change(-1, 0, 0, w.Calcium - w.CalciumPair), 1));
+        slopes.AddMetal(
+            total.Magnesium,
+            magnesium,
+            4,
+            new MetalPair(magnesium * hco3 * c.MgHco3, new Change(-1, 1, 0, w.Magnesium - w.MagnesiumPair), 1),
+            new MetalPair(magnesium * co3 * c.MgCo3, new Change(-2, 1, 0, w.Magnesium - w.Neutral), 0),
+            new MetalPair(magnesium * sulfate * c.MgSo4, new Change(0, 0, 1, w.Magnesium + w.Sulfate - w.Neutral), 0),
+            new MetalPair(magnesium * c.MgOh, new Change(-1, 0, 0, w.Magnesium - w.MagnesiumPair), 1));
+        slopes.AddMetal(
+            total.Sodium,
+            sodium,
+            1,
+            new MetalPair(sodium * hco3 * c.NaHco3, new Change(-1, 1, 0, w.Sodium - w.Neutral), 0),
+            new MetalPair(sodium * co3 * c.NaCo3, new Change(-2, 1, 0, w.Sodium - w.Single), 1),
+            new MetalPair(sodium * sulfate * c.NaSo4, new Change(0, 0, 1, w.Sodium + w.Sulfate - w.Single), 1),
+            default);
+        slopes.AddMetal(
+            total.Potassium,
+            potassium,
+            1,
+            default,
+            default,
+            new MetalPair(potassium * sulfate * c.KSo4, new Change(0, 0, 1, w.Potassium + w.Sulfate - w.Single), 1),
+            default);
+        return slopes.Solve();
+    }
+
     /// <summary>The last answer as a state.</summary>
     public readonly CarbonateState State(double ph)
     {
+        CarbonateSlopes slopes = Slopes(ph);
         double fugacity = Fugacity;
         double activityProduct = g.Calcium * calcium * g.Carbonate * co3;
         Caveats caveats = (solution.Ions, solution.HardnessMmolKg) switch
@@ -157,8 +208,8 @@ internal struct Speciation
             Co3UmolKg = co3 * 1e6,
             Fco2Uatm = fugacity * 1e6,
             Pco2Uatm = fugacity / k.FugacityFactor * 1e6,
-            BufferClosedUmolKg = BufferClosed * 1e6,
-            BufferOpenUmolKg = BufferOpen * 1e6,
+            BufferClosedUmolKg = slopes.Closed * 1e6,
+            BufferOpenUmolKg = slopes.Open * 1e6,
             OmegaCalcite = activityProduct / k.KspCalcite,
             OmegaAragonite = activityProduct / k.KspAragonite,
             Nh3Fraction = c.Nh3Fraction,
