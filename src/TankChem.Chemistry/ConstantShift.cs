@@ -14,8 +14,10 @@ internal readonly record struct ConstantShift
     public const double UPKNh4 = 0.01;
     public const double UBoronRelative = 0.02;
 
-    /// <summary>How far the ions of natural fresh waters spread about the assumed composition, as a factor of their amounts (common practice, no source; covers the waters of the reference tables).</summary>
-    public const double IonSpread = 1.6;
+    /// <summary>How far fresh waters spread about the assumed composition, standard deviations: ln of the salt beside the alkalinity (a factor of 3.7 either way), and the logit
+    /// of the share of calcium and magnesium among the cations (0.1 to 0.9). Common practice, no source; the waters of the reference tables lie within.</summary>
+    public const double ULnOtherSalt = 1.3;
+    public const double ULogitHardness = 2.2;
 
     public double PK0 { get; init; }
 
@@ -31,6 +33,12 @@ internal readonly record struct ConstantShift
 
     public double BoronRelative { get; init; }
 
-    /// <summary>ln of the factor on assumed ions; 0 leaves them.</summary>
-    public double LnAssumedIons { get; init; }
+    /// <summary>ln of the factor on the salt that is assumed beside the alkalinity.</summary>
+    public double LnOtherSalt { get; init; }
+
+    /// <summary>Logit of the share of calcium and magnesium among the assumed cations; 0 is one half.</summary>
+    public double LogitHardness { get; init; }
+
+    /// <summary>Shift of pH on the NBS scale against the total scale in salt water.</summary>
+    public double NbsBridge { get; init; }
 }

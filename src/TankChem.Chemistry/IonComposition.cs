@@ -1,6 +1,6 @@
 namespace TankChem.Chemistry;
 
-/// <summary>Major ions of a fresh water, mmol per kg of water. Each ≥ 0.</summary>
+/// <summary>Major ions of a fresh water, mmol per kg of water. Each 0…1,000; sodium closes the balance of charges with the alkalinity, chloride where there is none to take away.</summary>
 public sealed record IonComposition
 {
     /// <summary>Total calcium, mmol/kg.</summary>

@@ -15,21 +15,25 @@ internal static class NbsBridge
     public static double LogActivityPerTotal(double tK, double s, double totalPerFree, double seawaterPerFree)
     {
         double w = ShareOfFH(s);
-        double byFH = w > 0 ? Math.Log10(HydrogenActivityT82.FH(tK, s) * seawaterPerFree / totalPerFree) : 0;
+        double byFH = w > 0 ? LogByFH(tK, s, totalPerFree, seawaterPerFree) : 0;
         double byActivity = w < 1 ? LogByActivity(tK, s, totalPerFree) : 0;
         return w * byFH + (1 - w) * byActivity;
     }
 
-    /// <summary>Standard uncertainty of the NBS scale's place, pH: half of the difference of both ways where they are blended.</summary>
-    public static double StandardUncertainty(double tK, double s, double totalPerFree, double seawaterPerFree)
+    /// <summary>Standard uncertainty of the NBS scale's place, pH: half of the difference of both ways where they are blended, otherwise 0.</summary>
+    public static double StandardUncertainty(Solution solution)
     {
-        double w = ShareOfFH(s);
-        if (w is <= 0 or >= 1)
+        double s = solution.Salinity;
+        if (ShareOfFH(s) is <= 0 or >= 1)
             return 0;
-        return 0.5 * Math.Abs(Math.Log10(HydrogenActivityT82.FH(tK, s) * seawaterPerFree / totalPerFree) - LogByActivity(tK, s, totalPerFree));
+        var k = new SeaConstants(solution.TemperatureC, s, solution.PressureAtm, solution.Constants, default);
+        double tK = solution.TemperatureC + 273.15;
+        return 0.5 * Math.Abs(LogByFH(tK, s, k.TotalPerFree, k.SeawaterPerFree) - LogByActivity(tK, s, k.TotalPerFree));
     }
 
     private static double ShareOfFH(double s) => s <= 5 ? 0 : s >= 15 ? 1 : Blend.Smooth((Math.Log(s) - LnFrom) / (LnTo - LnFrom));
+
+    private static double LogByFH(double tK, double s, double totalPerFree, double seawaterPerFree) => Math.Log10(HydrogenActivityT82.FH(tK, s) * seawaterPerFree / totalPerFree);
 
     private static double LogByActivity(double tK, double s, double totalPerFree)
     {

@@ -56,7 +56,8 @@ internal static class Propagation
             sum.AddHenry(ConstantShift.UPK0);
         else
             Add(ref sum, solution, input, new() { PK0 = e }, new() { PK0 = -e }, ConstantShift.UPK0 / e);
-        bool blended = solution.Constants == ConstantSet.Auto && Blend.ShareOfSea(solution.Salinity) is > 0 and < 1;
+        double share = CarbonateSystem.ShareOfSea(solution);
+        bool blended = share is > 0 and < 1;
         if (solution.AmmoniaUmolKg == 0 && !blended)
             sum.AddAmmonium(ConstantShift.UPKNh4);
         else
@@ -64,18 +65,40 @@ internal static class Propagation
         Add(ref sum, solution, input, new() { PK1 = e }, new() { PK1 = -e }, ConstantShift.UPK1 / e);
         Add(ref sum, solution, input, new() { PK2 = e }, new() { PK2 = -e }, ConstantShift.UPK2 / e);
         Add(ref sum, solution, input, new() { PKW = e }, new() { PKW = -e }, ConstantShift.UPKW / e);
-        if (Blend.ShareOfSea(solution.Salinity) > 0 || solution.Constants is ConstantSet.Millero2010 or ConstantSet.Waters2014 or ConstantSet.Lueker2000)
+        if (share > 0)
         {
             Add(ref sum, solution, input, new() { PKB = e }, new() { PKB = -e }, ConstantShift.UPKB / e);
             Add(ref sum, solution, input, new() { BoronRelative = e }, new() { BoronRelative = -e }, ConstantShift.UBoronRelative / e);
         }
 
-        bool ionsAssumed = solution.Ions is null && solution.Constants is ConstantSet.Auto or ConstantSet.Fresh && Blend.ShareOfSea(solution.Salinity) < 1;
-        if (ionsAssumed)
+        AddAssumedIons(ref sum, solution, input);
+        AddModels(ref sum, solution, input, share);
+    }
+
+    /// <summary>Where two descriptions of one water are blended, neither is known to be the right one.</summary>
+    private static void AddModels(ref Squares sum, Solution solution, in CarbonateInput input, double share)
+    {
+        if (share is > 0 and < 1)
         {
-            double ln = Math.Log(ConstantShift.IonSpread);
-            Add(ref sum, solution, input, new() { LnAssumedIons = ln }, new() { LnAssumedIons = -ln }, 1);
+            // The standard deviation of a quantity that is one value with probability w and the other with 1 − w.
+            CarbonateState fresh = CarbonateSystem.Solve(solution with { Constants = ConstantSet.Fresh }, input, default);
+            CarbonateState sea = CarbonateSystem.Solve(solution with { Constants = ConstantSet.Millero2010 }, input, default);
+            if (fresh.Status == SolveStatus.Solved && sea.Status == SolveStatus.Solved)
+                sum.AddDifference(sea, fresh, Math.Sqrt(share * (1 - share)));
         }
+
+        if (share > 0 && NbsBridge.StandardUncertainty(solution) is > 0 and var u)
+            Add(ref sum, solution, input, new() { NbsBridge = RelativeStep }, new() { NbsBridge = -RelativeStep }, u / RelativeStep);
+    }
+
+    /// <summary>How natural waters differ from the assumed composition; a whole standard deviation to both sides, since it is wide.</summary>
+    private static void AddAssumedIons(ref Squares sum, Solution solution, in CarbonateInput input)
+    {
+        if (solution.Ions is not null || CarbonateSystem.ShareOfSea(solution) >= 1)
+            return;
+        Add(ref sum, solution, input, new() { LnOtherSalt = ConstantShift.ULnOtherSalt }, new() { LnOtherSalt = -ConstantShift.ULnOtherSalt }, 1);
+        if (solution.HardnessMmolKg is null)
+            Add(ref sum, solution, input, new() { LogitHardness = ConstantShift.ULogitHardness }, new() { LogitHardness = -ConstantShift.ULogitHardness }, 1);
     }
 
     private static void Add(ref Squares sum, Solution solution, in CarbonateInput input, in ConstantShift up, in ConstantShift down, double factor) =>
@@ -114,7 +137,12 @@ internal static class Propagation
                 (down, span) = (state, 1);
             if (down.Status != SolveStatus.Solved)
                 return;
-            double f = factor * span;
+            AddDifference(up, down, factor * span);
+        }
+
+        /// <summary>Adds a part of the difference of two states as a contribution.</summary>
+        public void AddDifference(in CarbonateState up, in CarbonateState down, double f)
+        {
             ph += Square(f * (up.PhNbs - down.PhNbs));
             alkalinity += Square(f * (up.AlkalinityUmolKg - down.AlkalinityUmolKg));
             dic += Square(f * (up.DicUmolKg - down.DicUmolKg));

@@ -49,7 +49,18 @@ internal readonly struct FreshWater
                 return new CarbonateState { Status = status, FaultyArgument = "no fresh water of this temperature has these two values together" };
         }
 
-        return speciation.State(ph);
+        return speciation.State(ph, speciation.Slopes(ph));
+    }
+
+    /// <summary>A speciation of this water to be asked again and again.</summary>
+    public Speciation Start() => new(solution, k, shift);
+
+    /// <summary>The water at an NBS pH and a pCO2 in µatm, and how it answers them.</summary>
+    public CarbonateState At(ref Speciation speciation, double phNbs, double pco2Uatm, out CarbonateSlopes slopes)
+    {
+        speciation.TryAt(phNbs, Known.Fugacity, pco2Uatm * 1e-6 * k.FugacityFactor);
+        slopes = speciation.Slopes(phNbs);
+        return speciation.State(phNbs, slopes);
     }
 
     private SolveStatus FindPH(ref Speciation speciation, in CarbonateInput input, double alkalinity, double dic, double fugacity, out double ph)

@@ -24,7 +24,6 @@ internal struct Speciation
     private readonly ConstantShift shift;
     private readonly double ammonia;
     private readonly Nutrients nutrients;
-    private readonly bool ionsFollowAlkalinity;
     private FreshIons total;
     private bool fixedIons;
     private double calcium;
@@ -50,7 +49,6 @@ internal struct Speciation
         k = constants;
         ammonia = solution.AmmoniaUmolKg * 1e-6;
         nutrients = new Nutrients(solution);
-        ionsFollowAlkalinity = FreshIons.DependsOnAlkalinity(solution);
         ionicStrength = 1e-3;
         Alkalinity = 1e-3;
         SetIons(Alkalinity);
@@ -131,7 +129,7 @@ internal struct Speciation
         return true;
     }
 
-    /// <summary>Derivatives at the last answer, amounts of ions held.</summary>
+    /// <summary>Derivatives at the last answer, base coming as that of sodium, the other ions held.</summary>
     public readonly CarbonateSlopes Slopes(double ph)
     {
         var w = ionicStrength < IonicStrengthMax ? new ActivitySlopes(k.Debye, ionicStrength) : default;
@@ -148,6 +146,7 @@ internal struct Speciation
         slopes.AddAlkalinity(new Change(-nutrient.Slope, 0, 0, nutrients.ByIonicStrength(Math.Exp(-ph * Ln10), g, w)));
         slopes.AddMetal(
             total.Calcium,
+            0,
             calcium,
             4,
             new MetalPair(calcium * hco3 * c.CaHco3, new Change(-1, 1, 0, w.Calcium - w.CalciumPair), 1),
@@ -156,6 +155,7 @@ internal struct Speciation
             new MetalPair(calcium * c.CaOh, new Change(-1, 0, 0, w.Calcium - w.CalciumPair), 1));
         slopes.AddMetal(
             total.Magnesium,
+            0,
             magnesium,
             4,
             new MetalPair(magnesium * hco3 * c.MgHco3, new Change(-1, 1, 0, w.Magnesium - w.MagnesiumPair), 1),
@@ -164,6 +164,7 @@ internal struct Speciation
             new MetalPair(magnesium * c.MgOh, new Change(-1, 0, 0, w.Magnesium - w.MagnesiumPair), 1));
         slopes.AddMetal(
             total.Sodium,
+            total.Sodium > 0 ? 1 : 0,
             sodium,
             1,
             new MetalPair(sodium * hco3 * c.NaHco3, new Change(-1, 1, 0, w.Sodium - w.Neutral), 0),
@@ -172,19 +173,21 @@ internal struct Speciation
             default);
         slopes.AddMetal(
             total.Potassium,
+            0,
             potassium,
             1,
             default,
             default,
             new MetalPair(potassium * sulfate * c.KSo4, new Change(0, 0, 1, w.Potassium + w.Sulfate - w.Single), 1),
             default);
+        if (!(total.Sodium > 0))
+            slopes.AddChloride();
         return slopes.Solve();
     }
 
     /// <summary>The last answer as a state.</summary>
-    public readonly CarbonateState State(double ph)
+    public readonly CarbonateState State(double ph, in CarbonateSlopes slopes)
     {
-        CarbonateSlopes slopes = Slopes(ph);
         double fugacity = Fugacity;
         double activityProduct = g.Calcium * calcium * g.Carbonate * co3;
         Caveats caveats = (solution.Ions, solution.HardnessMmolKg) switch
@@ -247,7 +250,7 @@ internal struct Speciation
             if (!Carbonates(known, value))
                 return false;
             FreeIons();
-            if (ionsFollowAlkalinity && !fixedIons)
+            if (!fixedIons)
                 SetIons(Alkalinity);
             double tolerance = Math.Max(Tolerance, SubstitutionShare * Math.Abs(ionicStrength - ionicStrengthBefore) / ionicStrength);
             if (Math.Abs(ionicStrength - strength) <= tolerance * ionicStrength && Math.Abs(hco3 - bicarbonate) <= tolerance * hco3)

@@ -2,7 +2,7 @@ namespace TankChem.Chemistry.Fresh;
 
 /// <summary>
 /// Derivatives of a solved speciation. By the laws of mass action the logarithm of every species is a linear form (<see cref="Change"/>); the metals' balances give their free
-/// ions, and the balances of sulfate and of ionic strength are two linear equations in the two changes that are not free.
+/// ions, and the balances of sulfate, ionic strength and alkalinity are three linear equations in the three changes that are not free. Alkalinity comes and goes with sodium.
 /// </summary>
 internal ref struct SpeciationSlopes
 {
@@ -34,15 +34,20 @@ internal ref struct SpeciationSlopes
         charge += 4 * change;
     }
 
+    /// <summary>Adds chloride that leaves as alkalinity comes.</summary>
+    public void AddChloride() => charge += new Change(0, 0, 0, 0, -1);
+
     /// <summary>Adds alkalinity whose ions count in nothing else.</summary>
     public void AddAlkalinity(in Change change) => alkalinity += change;
 
-    /// <summary>Adds a metal with its four pairs; a pair's change is given with the free metal held.</summary>
-    public void AddMetal(double total, double free, double chargeSquared, in MetalPair bicarbonate, in MetalPair carbonate, in MetalPair withSulfate, in MetalPair hydroxide)
+    /// <summary>Adds a metal with its four pairs; a pair's change is given with the free metal held, and how much of the metal comes with each mole of alkalinity.</summary>
+    public void AddMetal(
+        double total, double totalByAlkalinity, double free, double chargeSquared, in MetalPair bicarbonate, in MetalPair carbonate, in MetalPair withSulfate, in MetalPair hydroxide)
     {
         if (!(total > 0))
             return;
-        Change metal = -1 / total * (bicarbonate.Amount * bicarbonate.Ln + carbonate.Amount * carbonate.Ln + withSulfate.Amount * withSulfate.Ln + hydroxide.Amount * hydroxide.Ln);
+        Change metal = 1 / total * (new Change(0, 0, 0, 0, totalByAlkalinity)
+            + -1 * (bicarbonate.Amount * bicarbonate.Ln + carbonate.Amount * carbonate.Ln + withSulfate.Amount * withSulfate.Ln + hydroxide.Amount * hydroxide.Ln));
         charge += chargeSquared * free * metal;
         Add(bicarbonate.Amount, metal + bicarbonate.Ln, bicarbonate.ChargeSquared, 1, 1);
         Add(carbonate.Amount, metal + carbonate.Ln, carbonate.ChargeSquared, 2, 1);
@@ -52,24 +57,34 @@ internal ref struct SpeciationSlopes
         charge += withSulfate.ChargeSquared * pair;
     }
 
-    /// <summary>Solves for the two changes that are not free and gives the slopes.</summary>
+    /// <summary>Solves for the three changes that are not free and gives the slopes.</summary>
     public readonly CarbonateSlopes Solve()
     {
-        // Without sulfate its balance is empty; any value does, since no amount goes with it.
-        double a = sulfate.LnSulfate > 0 ? sulfate.LnSulfate : 1, b = sulfate.IonicStrength;
-        double c = charge.LnSulfate, d = charge.IonicStrength - 2;
-        double determinant = a * d - b * c;
-        (double sulfateByH, double strengthByH) = Unknowns(a, b, c, d, determinant, sulfate.LnHydrogen, charge.LnHydrogen);
-        (double sulfateByF, double strengthByF) = Unknowns(a, b, c, d, determinant, sulfate.LnFugacity, charge.LnFugacity);
+        (double sulfateByH, double strengthByH, double alkalinityByH) = Unknowns(-sulfate.LnHydrogen, -charge.LnHydrogen, -alkalinity.LnHydrogen);
+        (double sulfateByF, double strengthByF, double alkalinityByF) = Unknowns(-sulfate.LnFugacity, -charge.LnFugacity, -alkalinity.LnFugacity);
         return new CarbonateSlopes(
-            -Ln10 * (alkalinity.LnHydrogen + alkalinity.LnSulfate * sulfateByH + alkalinity.IonicStrength * strengthByH),
-            alkalinity.LnFugacity + alkalinity.LnSulfate * sulfateByF + alkalinity.IonicStrength * strengthByF,
-            -Ln10 * (dic.LnHydrogen + dic.LnSulfate * sulfateByH + dic.IonicStrength * strengthByH),
-            dic.LnFugacity + dic.LnSulfate * sulfateByF + dic.IonicStrength * strengthByF);
+            -Ln10 * alkalinityByH,
+            alkalinityByF,
+            -Ln10 * (dic.LnHydrogen + dic.LnSulfate * sulfateByH + dic.IonicStrength * strengthByH + dic.Alkalinity * alkalinityByH),
+            dic.LnFugacity + dic.LnSulfate * sulfateByF + dic.IonicStrength * strengthByF + dic.Alkalinity * alkalinityByF);
     }
 
-    private static (double Sulfate, double IonicStrength) Unknowns(double a, double b, double c, double d, double determinant, double sulfateSide, double chargeSide) =>
-        ((b * chargeSide - d * sulfateSide) / determinant, (c * sulfateSide - a * chargeSide) / determinant);
+    /// <summary>The changes of ln sulfate, ionic strength and alkalinity, by Cramer's rule.</summary>
+    private readonly (double LnSulfate, double IonicStrength, double Alkalinity) Unknowns(double r1, double r2, double r3)
+    {
+        // Without sulfate its balance is empty; any value does, since no amount goes with it.
+        double a1 = sulfate.LnSulfate > 0 ? sulfate.LnSulfate : 1, b1 = sulfate.IonicStrength, c1 = sulfate.Alkalinity;
+        double a2 = charge.LnSulfate, b2 = charge.IonicStrength - 2, c2 = charge.Alkalinity;
+        double a3 = alkalinity.LnSulfate, b3 = alkalinity.IonicStrength, c3 = alkalinity.Alkalinity - 1;
+        double determinant = Determinant(a1, b1, c1, a2, b2, c2, a3, b3, c3);
+        return (
+            Determinant(r1, b1, c1, r2, b2, c2, r3, b3, c3) / determinant,
+            Determinant(a1, r1, c1, a2, r2, c2, a3, r3, c3) / determinant,
+            Determinant(a1, b1, r1, a2, b2, r2, a3, b3, r3) / determinant);
+    }
+
+    private static double Determinant(double a1, double b1, double c1, double a2, double b2, double c2, double a3, double b3, double c3) =>
+        a1 * (b2 * c3 - c2 * b3) - b1 * (a2 * c3 - c2 * a3) + c1 * (a2 * b3 - b2 * a3);
 }
 
 /// <summary>A pair of a metal: amount, change of its logarithm with the free metal held, charge squared.</summary>

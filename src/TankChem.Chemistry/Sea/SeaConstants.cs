@@ -30,7 +30,7 @@ internal readonly struct SeaConstants
         KNh4 = Ten(-SideAcids.PKAmmonium(tK, s) - shift.PKNh4) * SeaSalt.WaterShare(s);
         KspCalcite = CalciumCarbonateMuc83.Calcite(tK, lnT, s, sqrtS);
         KspAragonite = CalciumCarbonateMuc83.Aragonite(tK, lnT, s, sqrtS);
-        LogNbsPerTotal = NbsBridge.LogActivityPerTotal(tK, s, TotalPerFree, SeawaterPerFree);
+        LogNbsPerTotal = NbsBridge.LogActivityPerTotal(tK, s, TotalPerFree, SeawaterPerFree) + shift.NbsBridge;
     }
 
     public double IonicStrength { get; }

@@ -71,6 +71,17 @@ internal readonly struct SeaWater
         return RootFinder.TryFind(ref open, PHLow, PHHigh, StartingPH.Open(alkalinity, co2, k.K1), out ph);
     }
 
+    /// <summary>The water at an NBS pH and a pCO2 in µatm, and how it answers them.</summary>
+    public CarbonateState At(double phNbs, double pco2Uatm, out CarbonateSlopes slopes)
+    {
+        double ph = phNbs + k.LogNbsPerTotal, h = Math.Pow(10, -ph);
+        double co2 = pco2Uatm * 1e-6 * k.FugacityFactor * k.K0;
+        double hco3 = k.K1 * co2 / h, co3 = k.K2 * hco3 / h, dic = co2 + hco3 + co3;
+        Side(h, out double sideSlope);
+        slopes = new CarbonateSlopes(Ln10 * (hco3 + 4 * co3 - sideSlope), hco3 + 2 * co3, Ln10 * (hco3 + 2 * co3), dic);
+        return State(ph, h, dic);
+    }
+
     private CarbonateState State(double ph, double h, double dic)
     {
         double co2 = dic / (1 + k.K1 / h + k.K1 * k.K2 / (h * h));
