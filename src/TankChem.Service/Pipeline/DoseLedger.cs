@@ -50,7 +50,8 @@ internal sealed class DoseLedger
             {
                 if (dose.At < midnight || dose.At > now || dose.Amount is not { } grams || !sharedBy.Contains(dose.Place))
                     continue;
-                if (dose.Subject is { } id && ReagentCatalog.Find(id) is { } reagent)
+                // An acid given the same day does not make room for more base.
+                if (dose.Subject is { } id && ReagentCatalog.Find(id) is { EquivalentsPerMole: > 0 } reagent)
                     mmol += grams * reagent.EquivalentsPerMole / reagent.MolarMassGMol * 1000;
             }
         }

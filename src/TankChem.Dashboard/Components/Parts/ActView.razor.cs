@@ -1,6 +1,8 @@
 using Microsoft.AspNetCore.Components;
 using TankChem.Dashboard.Text;
 using TankChem.Dosing;
+using TankChem.Monitoring.Advising;
+using TankChem.Monitoring.Alarming;
 using TankChem.Monitoring.Ports;
 using TankChem.Monitoring.Readings;
 using TankChem.Monitoring.Water;
@@ -26,8 +28,12 @@ public sealed partial class ActView
 
     /// <summary>CO2 is over a limit, or an alarm about CO2 or low pH stands.</summary>
     private bool CarbonWorry =>
-        Place.Alarms.Any(a => a.IsActive && (a.Quantity == "co2" || a.Key.Rule.StartsWith("ph-low", StringComparison.Ordinal)))
+        Place.Alarms.Any(a => a.IsActive && AlarmAdvice.Of(a) == AdviceSection.HighCo2)
         || (Place.Water.Values.TryGetValue("co2", out WaterValue? co2) && Place.Limits.Any(l => l.Quantity == "co2" && l.IsUpper && co2.Value + (co2.U ?? 0) > l.Value));
+
+    /// <summary>Alarms whose advice is their own first action; people first.</summary>
+    private IReadOnlyList<AlarmView> FirstActions =>
+        [.. Place.Alarms.Where(a => a.IsActive && AlarmAdvice.Of(a) is (AdviceSection.People or AdviceSection.FirstAction or AdviceSection.Measure)).OrderByDescending(a => a.DangerToPeople)];
 
     /// <inheritdoc/>
     protected override void OnInitialized() =>
