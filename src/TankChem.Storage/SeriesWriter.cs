@@ -1,4 +1,5 @@
 using Microsoft.Data.Sqlite;
+using TankChem.Monitoring.Bodies;
 using TankChem.Monitoring.Places;
 using TankChem.Monitoring.Ports;
 using TankChem.Monitoring.Readings;
@@ -28,9 +29,10 @@ internal sealed class SeriesWriter : IDisposable
 
     private const string Rederive = "UPDATE reading SET value = $value, flag = $flag, reason = $reason WHERE series_id = $series AND time_ms = $time";
 
-    private const string InsertState = """
-        INSERT INTO state_value (state_series_id, time_ms, value, u) VALUES ($series, $time, $value, $u)
-        ON CONFLICT DO UPDATE SET value = excluded.value, u = excluded.u
+    private const string InsertState = "INSERT INTO state_value (state_series_id, time_ms, value, u) VALUES ($series, $time, $value, $u) ON CONFLICT DO NOTHING";
+
+    private const string ReplaceState = """
+        UPDATE state_value SET value = $value, u = $u WHERE state_series_id = $series AND time_ms = $time AND (value <> $value OR u IS NOT $u)
         """;
 
     private readonly Dictionary<SeriesKey, long> seriesIds = [];
@@ -41,6 +43,9 @@ internal sealed class SeriesWriter : IDisposable
     private readonly SqliteCommand takeNewValue;
     private readonly SqliteCommand rederive;
     private readonly SqliteCommand insertState;
+    private readonly SqliteCommand replaceState;
+    private readonly RollupWriter readingRollups;
+    private readonly RollupWriter stateRollups;
 
     public SeriesWriter(SqliteConnection connection)
     {
@@ -51,11 +56,14 @@ internal sealed class SeriesWriter : IDisposable
         takeNewValue = Prepare(TakeNewValue, reading);
         rederive = Prepare(Rederive, "$series", "$time", "$value", "$flag", "$reason");
         insertState = Prepare(InsertState, "$series", "$time", "$value", "$u");
+        replaceState = Prepare(ReplaceState, "$series", "$time", "$value", "$u");
+        readingRollups = new RollupWriter(connection, SeriesTable.Readings);
+        stateRollups = new RollupWriter(connection, SeriesTable.States);
     }
 
     public void Write(JournalBatch batch, SqliteTransaction transaction)
     {
-        foreach (SqliteCommand command in new[] { insertReading, keepOldValue, takeNewValue, rederive, insertState })
+        foreach (SqliteCommand command in new[] { insertReading, keepOldValue, takeNewValue, rederive, insertState, replaceState })
             command.Transaction = transaction;
         for (int i = 0; i < batch.Readings.Count; i++)
             Write(batch.Readings[i], transaction);
@@ -63,6 +71,8 @@ internal sealed class SeriesWriter : IDisposable
             Write(batch.States[i], transaction);
         for (int i = 0; i < batch.Rederived.Count; i++)
             WriteRederived(batch.Rederived[i], transaction);
+        readingRollups.Flush(transaction);
+        stateRollups.Flush(transaction);
     }
 
     public void Dispose()
@@ -72,19 +82,28 @@ internal sealed class SeriesWriter : IDisposable
         takeNewValue.Dispose();
         rederive.Dispose();
         insertState.Dispose();
+        replaceState.Dispose();
+        readingRollups.Dispose();
+        stateRollups.Dispose();
     }
 
     private void Write(Reading reading, SqliteTransaction transaction)
     {
+        CheckStorable(reading);
         long id = SeriesId(reading.Series, transaction);
+        long ms = RowMapping.Ms(reading.Time);
         Fill(insertReading, id, reading);
         if (insertReading.ExecuteNonQuery() > 0)
+        {
+            if (reading.IsUsable)
+                readingRollups.Add(id, ms, reading.Value!.Value);
             return;
+        }
 
         // The identity is there already: the same value again changes nothing, another one is a correction and the old one is kept.
         SqliteParameterCollection p = keepOldValue.Parameters;
         p[0].Value = id;
-        p[1].Value = RowMapping.Ms(reading.Time);
+        p[1].Value = ms;
         p[2].Value = RowMapping.Ms(reading.ReceivedAt);
         p[3].Value = reading.RawValue;
         p[4].Value = reading.RawUnit ?? (object)DBNull.Value;
@@ -92,6 +111,14 @@ internal sealed class SeriesWriter : IDisposable
             return;
         Fill(takeNewValue, id, reading);
         takeNewValue.ExecuteNonQuery();
+        readingRollups.Change(id, ms);
+    }
+
+    /// <summary>A number that is none would pass into every mean; it is refused here, whatever let it through.</summary>
+    private static void CheckStorable(Reading reading)
+    {
+        if (!double.IsFinite(reading.RawValue) || reading.Value is { } value && !double.IsFinite(value))
+            throw new JournalRowException($"The reading of {reading.Series} at {Rfc3339.Text(reading.Time)} has a value that is not a finite number.");
     }
 
     private static void Fill(SqliteCommand command, long id, Reading reading)
@@ -110,13 +137,17 @@ internal sealed class SeriesWriter : IDisposable
 
     private void WriteRederived(Reading reading, SqliteTransaction transaction)
     {
+        CheckStorable(reading);
         SqliteParameterCollection p = rederive.Parameters;
-        p[0].Value = SeriesId(reading.Series, transaction);
-        p[1].Value = RowMapping.Ms(reading.Time);
+        long id = SeriesId(reading.Series, transaction);
+        long ms = RowMapping.Ms(reading.Time);
+        p[0].Value = id;
+        p[1].Value = ms;
         p[2].Value = reading.Value ?? (object)DBNull.Value;
         p[3].Value = (int)reading.Flag;
         p[4].Value = reading.Reason ?? (object)DBNull.Value;
-        rederive.ExecuteNonQuery();
+        if (rederive.ExecuteNonQuery() > 0)
+            readingRollups.Change(id, ms);
     }
 
     private void Write(WaterState state, SqliteTransaction transaction)
@@ -124,18 +155,34 @@ internal sealed class SeriesWriter : IDisposable
         if (state.Time is not { } time)
             return;
         long ms = RowMapping.Ms(time);
-        SqliteParameterCollection p = insertState.Parameters;
         foreach ((string quantity, WaterValue value) in state.Values)
         {
             // A value that is only the last known one says nothing of this instant.
             if (value.Stale)
                 continue;
-            p[0].Value = StateSeriesId(state.Place, quantity, transaction);
-            p[1].Value = ms;
-            p[2].Value = value.Value;
-            p[3].Value = value.U ?? (object)DBNull.Value;
-            insertState.ExecuteNonQuery();
+            if (!double.IsFinite(value.Value) || value.U is { } u && !double.IsFinite(u))
+                throw new JournalRowException($"The {quantity} of {state.Place} at {Rfc3339.Text(time)} is not a finite number.");
+            long id = StateSeriesId(state.Place, quantity, transaction);
+            Fill(insertState, id, ms, value);
+            if (insertState.ExecuteNonQuery() > 0)
+            {
+                stateRollups.Add(id, ms, value.Value);
+                continue;
+            }
+
+            Fill(replaceState, id, ms, value);
+            if (replaceState.ExecuteNonQuery() > 0)
+                stateRollups.Change(id, ms);
         }
+    }
+
+    private static void Fill(SqliteCommand command, long id, long ms, WaterValue value)
+    {
+        SqliteParameterCollection p = command.Parameters;
+        p[0].Value = id;
+        p[1].Value = ms;
+        p[2].Value = value.Value;
+        p[3].Value = value.U ?? (object)DBNull.Value;
     }
 
     private long SeriesId(in SeriesKey key, SqliteTransaction transaction)
@@ -145,10 +192,10 @@ internal sealed class SeriesWriter : IDisposable
         using SqliteCommand command = connection.CreateCommand();
         command.Transaction = transaction;
         command.CommandText = "INSERT INTO series (site, place, quantity, probe) VALUES ($site, $place, $quantity, $probe) ON CONFLICT DO UPDATE SET site = excluded.site RETURNING id";
-        command.Parameters.AddWithValue("$site", key.Place.Site);
-        command.Parameters.AddWithValue("$place", key.Place.Place);
-        command.Parameters.AddWithValue("$quantity", key.Quantity);
-        command.Parameters.AddWithValue("$probe", key.Probe);
+        command.Parameters.AddWithValue("$site", key.Place.Site ?? (object)DBNull.Value);
+        command.Parameters.AddWithValue("$place", key.Place.Place ?? (object)DBNull.Value);
+        command.Parameters.AddWithValue("$quantity", key.Quantity ?? (object)DBNull.Value);
+        command.Parameters.AddWithValue("$probe", key.Probe ?? (object)DBNull.Value);
         id = (long)command.ExecuteScalar()!;
         seriesIds[key] = id;
         return id;

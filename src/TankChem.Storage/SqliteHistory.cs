@@ -13,86 +13,47 @@ namespace TankChem.Storage;
 /// <summary>Reads what is on disk; each question has a short read of its own.</summary>
 internal sealed class SqliteHistory(SqliteConnections connections) : IHistory
 {
-    private const string TrendOfReadings = """
-        SELECT (r.time_ms - $from) * $points / ($to - $from) AS bucket, min(r.value), avg(r.value), max(r.value), count(*)
-        FROM reading r JOIN series s ON s.id = r.series_id
-        WHERE s.site = $site AND s.place = $place AND s.quantity = $quantity AND r.time_ms >= $from AND r.time_ms < $to AND r.flag = 1 AND r.value IS NOT NULL
-        GROUP BY bucket ORDER BY bucket
-        """;
-
-    private const string TrendOfStates = """
-        SELECT (v.time_ms - $from) * $points / ($to - $from) AS bucket, min(v.value), avg(v.value), max(v.value), count(*)
-        FROM state_value v JOIN state_series s ON s.id = v.state_series_id
-        WHERE s.site = $site AND s.place = $place AND s.quantity = $quantity AND v.time_ms >= $from AND v.time_ms < $to
-        GROUP BY bucket ORDER BY bucket
-        """;
-
-    private const string ReadingColumns = "s.quantity, s.probe, r.time_ms, r.received_ms, r.raw_value, r.raw_unit, r.value, r.flag, r.reason, r.origin";
+    private const string MeasuredPco2 = "pco2-measured";
+    private const string Pco2 = "pco2";
 
     public Task<IReadOnlyList<TrendBucket>> TrendAsync(PlaceKey place, string quantity, DateTimeOffset from, DateTimeOffset to, int points, CancellationToken cancellationToken)
     {
         ArgumentOutOfRangeException.ThrowIfNegativeOrZero(points);
         ArgumentOutOfRangeException.ThrowIfGreaterThanOrEqual(from, to);
-        return Task.Run<IReadOnlyList<TrendBucket>>(
-            () =>
+        return ReadAsync<TrendBucket>(
+            connection =>
             {
-                using SqliteConnection connection = connections.OpenReader();
-                List<TrendBucket> readings = Buckets(connection, TrendOfReadings, place, quantity, from, to, points);
-                return readings.Count > 0 ? readings : Buckets(connection, TrendOfStates, place, quantity, from, to, points);
+                // Several statements that must see the same moment.
+                using SqliteTransaction moment = connection.BeginTransaction(deferred: true);
+                List<TrendBucket> buckets = [];
+                if (ReadAs(quantity) is { } taken)
+                    buckets = new TrendReader(connection, SeriesTable.Readings, from, to, points).Read([.. SeriesList.Readings(connection, place, taken).Select(s => s.Id)]);
+                if (buckets.Count == 0)
+                    buckets = new TrendReader(connection, SeriesTable.States, from, to, points).Read(SeriesList.States(connection, place, quantity));
+                return buckets;
             },
             cancellationToken);
     }
 
-    public Task<IReadOnlyList<Reading>> ReadingsAsync(PlaceKey place, string quantity, DateTimeOffset from, DateTimeOffset to, ReadingCursor? after, int limit, CancellationToken cancellationToken) => Task.Run<IReadOnlyList<Reading>>(
-        () =>
-        {
-            using SqliteConnection connection = connections.OpenReader();
-            using SqliteCommand command = PlaceCommand(
-                connection,
-                $"""
-                SELECT {ReadingColumns} FROM reading r JOIN series s ON s.id = r.series_id
-                WHERE s.site = $site AND s.place = $place AND s.quantity = $quantity AND r.time_ms >= $from AND r.time_ms < $to
-                  AND ($afterMs IS NULL OR r.time_ms > $afterMs OR (r.time_ms = $afterMs AND s.probe > $afterProbe))
-                ORDER BY r.time_ms, s.probe LIMIT $limit
-                """,
-                place,
-                from,
-                to);
-            command.Parameters.AddWithValue("$quantity", quantity);
-            command.Parameters.AddWithValue("$limit", limit);
-            command.Parameters.AddWithValue("$afterMs", after is { } cursor ? RowMapping.Ms(cursor.Time) : DBNull.Value);
-            command.Parameters.AddWithValue("$afterProbe", after?.Probe ?? (object)DBNull.Value);
-            return ReadingReader.All(command, place);
-        },
-        cancellationToken);
+    public Task<IReadOnlyList<Reading>> ReadingsAsync(PlaceKey place, string quantity, DateTimeOffset from, DateTimeOffset to, ReadingCursor? after, int limit, CancellationToken cancellationToken)
+    {
+        ArgumentOutOfRangeException.ThrowIfNegativeOrZero(limit);
+        return ReadAsync(connection => Page(connection, place, SeriesList.Readings(connection, place, quantity == MeasuredPco2 ? Pco2 : quantity), RowMapping.EdgeMs(from), RowMapping.EdgeMs(to), after, limit, cancellationToken), cancellationToken);
+    }
 
-    public Task<IReadOnlyList<Reading>> AllReadingsAsync(PlaceKey place, DateTimeOffset from, DateTimeOffset to, int limit, CancellationToken cancellationToken) => Task.Run<IReadOnlyList<Reading>>(
-        () =>
-        {
-            using SqliteConnection connection = connections.OpenReader();
-            using SqliteCommand command = PlaceCommand(
-                connection,
-                $"""
-                SELECT {ReadingColumns} FROM reading r JOIN series s ON s.id = r.series_id
-                WHERE s.site = $site AND s.place = $place AND r.time_ms >= $from AND r.time_ms < $to
-                ORDER BY r.time_ms, s.quantity, s.probe LIMIT $limit
-                """,
-                place,
-                from,
-                to);
-            command.Parameters.AddWithValue("$limit", limit);
-            return ReadingReader.All(command, place);
-        },
-        cancellationToken);
+    public Task<IReadOnlyList<Reading>> AllReadingsAsync(PlaceKey place, DateTimeOffset from, DateTimeOffset to, int limit, CancellationToken cancellationToken)
+    {
+        ArgumentOutOfRangeException.ThrowIfNegativeOrZero(limit);
+        return ReadAsync(connection => Page(connection, place, SeriesList.Readings(connection, place, null), RowMapping.EdgeMs(from), RowMapping.EdgeMs(to), null, limit, cancellationToken), cancellationToken);
+    }
 
-    public Task<IReadOnlyList<StateValue>> StateValuesAsync(PlaceKey place, DateTimeOffset from, DateTimeOffset to, CancellationToken cancellationToken) => Task.Run<IReadOnlyList<StateValue>>(
-        () =>
+    public Task<IReadOnlyList<StateValue>> StateValuesAsync(PlaceKey place, DateTimeOffset from, DateTimeOffset to, CancellationToken cancellationToken) => ReadAsync<StateValue>(
+        connection =>
         {
-            using SqliteConnection connection = connections.OpenReader();
             using SqliteCommand command = PlaceCommand(
                 connection,
                 """
-                SELECT v.time_ms, s.quantity, v.value, v.u FROM state_value v JOIN state_series s ON s.id = v.state_series_id
+                SELECT v.time_ms, s.quantity, v.value, v.u FROM state_series s CROSS JOIN state_value v ON v.state_series_id = s.id
                 WHERE s.site = $site AND s.place = $place AND v.time_ms >= $from AND v.time_ms < $to
                 ORDER BY v.time_ms, s.quantity
                 """,
@@ -110,7 +71,7 @@ internal sealed class SqliteHistory(SqliteConnections connections) : IHistory
     public Task<IReadOnlyList<AlarmJournalEntry>> AlarmJournalAsync(PlaceKey? place, DateTimeOffset from, DateTimeOffset to, CancellationToken cancellationToken) => QueryAsync(
         context =>
         {
-            long fromMs = RowMapping.Ms(from), toMs = RowMapping.Ms(to);
+            long fromMs = RowMapping.EdgeMs(from), toMs = RowMapping.EdgeMs(to);
             IQueryable<AlarmEntryRow> rows = context.AlarmEntries.AsNoTracking().Where(r => r.AtMs >= fromMs && r.AtMs < toMs);
             if (place is { } key)
                 rows = rows.Where(r => r.Site == key.Site && r.Place == key.Place);
@@ -121,7 +82,7 @@ internal sealed class SqliteHistory(SqliteConnections connections) : IHistory
     public Task<IReadOnlyList<LogEntry>> LogAsync(PlaceKey? place, DateTimeOffset from, DateTimeOffset to, int limit, CancellationToken cancellationToken) => QueryAsync(
         context =>
         {
-            long fromMs = RowMapping.Ms(from), toMs = RowMapping.Ms(to);
+            long fromMs = RowMapping.EdgeMs(from), toMs = RowMapping.EdgeMs(to);
             IQueryable<LogRow> rows = context.Log.AsNoTracking().Where(r => r.AtMs >= fromMs && r.AtMs < toMs);
             if (place is { } key)
                 rows = rows.Where(r => r.Site == key.Site && r.Place == key.Place);
@@ -143,40 +104,46 @@ internal sealed class SqliteHistory(SqliteConnections connections) : IHistory
         context => context.Unreadable.AsNoTracking().OrderByDescending(r => r.Id).Take(limit).AsEnumerable().Select(RowMapping.FromRow),
         cancellationToken);
 
-    private Task<IReadOnlyList<T>> QueryAsync<T>(Func<StoreContext, IEnumerable<T>> query, CancellationToken cancellationToken) => Task.Run<IReadOnlyList<T>>(
-        () =>
+    private Task<IReadOnlyList<T>> QueryAsync<T>(Func<StoreContext, IEnumerable<T>> query, CancellationToken cancellationToken) => ReadAsync<T>(
+        connection =>
         {
-            using SqliteConnection connection = connections.OpenReader();
             using StoreContext context = SqliteConnections.Context(connection);
             return [.. query(context)];
         },
         cancellationToken);
 
-    private static List<TrendBucket> Buckets(SqliteConnection connection, string sql, PlaceKey place, string quantity, DateTimeOffset from, DateTimeOffset to, int points)
-    {
-        using SqliteCommand command = PlaceCommand(connection, sql, place, from, to);
-        command.Parameters.AddWithValue("$quantity", quantity);
-        command.Parameters.AddWithValue("$points", points);
-        long fromMs = RowMapping.Ms(from), span = RowMapping.Ms(to) - fromMs;
-        var buckets = new List<TrendBucket>();
-        using SqliteDataReader reader = command.ExecuteReader();
-        while (reader.Read())
+    private Task<IReadOnlyList<T>> ReadAsync<T>(Func<SqliteConnection, IReadOnlyList<T>> read, CancellationToken cancellationToken) => Task.Run(
+        () =>
         {
-            long at = reader.GetInt64(0);
-            buckets.Add(new TrendBucket(
-                RowMapping.Time(fromMs + CeilingDivide(at * span, points)),
-                RowMapping.Time(fromMs + CeilingDivide((at + 1) * span, points)),
-                reader.GetDouble(1),
-                reader.GetDouble(2),
-                reader.GetDouble(3),
-                reader.GetInt64(4)));
+            using SqliteConnection connection = connections.OpenReader();
+            return read(connection);
+        },
+        cancellationToken);
+
+    /// <summary>Which readings a name stands for in trends: a CO2 probe's are "pco2-measured", because "pco2" is the computed one; null for none.</summary>
+    private static string? ReadAs(string quantity) => quantity switch
+    {
+        MeasuredPco2 => Pco2,
+        Pco2 => null,
+        _ => quantity,
+    };
+
+    /// <summary>The first rows by time, quantity and probe: as many of each series as the page takes, put in order, so that a page costs the same wherever it begins.</summary>
+    private static IReadOnlyList<Reading> Page(SqliteConnection connection, PlaceKey place, IReadOnlyList<SeriesList.Entry> series, long fromMs, long toMs, ReadingCursor? after, int limit, CancellationToken cancellationToken)
+    {
+        using SqliteTransaction moment = connection.BeginTransaction(deferred: true);
+        var readings = new List<Reading>();
+        foreach (SeriesList.Entry one in series)
+        {
+            cancellationToken.ThrowIfCancellationRequested();
+            long start = fromMs;
+            if (after is { } cursor)
+                start = Math.Max(start, RowMapping.Ms(cursor.Time) + (string.CompareOrdinal(one.Key.Probe, cursor.Probe) <= 0 ? 1 : 0));
+            ReadingReader.AddTo(readings, connection, one, start, toMs, limit);
         }
 
-        return buckets;
+        return [.. readings.OrderBy(r => r.Time).ThenBy(r => r.Series.Quantity, StringComparer.Ordinal).ThenBy(r => r.Series.Probe, StringComparer.Ordinal).Take(limit)];
     }
-
-    /// <summary>The first whole millisecond of a bucket, so that the printed edges say exactly which readings are in it.</summary>
-    private static long CeilingDivide(long a, long b) => (a + b - 1) / b;
 
     private static SqliteCommand PlaceCommand(SqliteConnection connection, string sql, PlaceKey place, DateTimeOffset from, DateTimeOffset to)
     {
@@ -184,8 +151,8 @@ internal sealed class SqliteHistory(SqliteConnections connections) : IHistory
         command.CommandText = sql;
         command.Parameters.AddWithValue("$site", place.Site);
         command.Parameters.AddWithValue("$place", place.Place);
-        command.Parameters.AddWithValue("$from", RowMapping.Ms(from));
-        command.Parameters.AddWithValue("$to", RowMapping.Ms(to));
+        command.Parameters.AddWithValue("$from", RowMapping.EdgeMs(from));
+        command.Parameters.AddWithValue("$to", RowMapping.EdgeMs(to));
         return command;
     }
 }

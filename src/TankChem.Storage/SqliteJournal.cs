@@ -27,21 +27,16 @@ internal sealed class SqliteJournal(SqliteConnections connections) : IJournal, I
                 WriteRecords(batch, transaction);
             transaction.Commit();
         }
-        catch (DbUpdateException e) when (e.InnerException is SqliteException inner)
+        catch (DbUpdateException e)
         {
+            // The model refuses a value before SQLite sees it, or SQLite refuses the row.
             Reset();
-            throw Translate(inner);
+            throw e.InnerException is SqliteException inner ? Translate(inner) : new JournalRowException(e.InnerException?.Message ?? e.Message, e);
         }
         catch (SqliteException e)
         {
             Reset();
             throw Translate(e);
-        }
-        catch (Exception e) when (e is InvalidOperationException or ArgumentException)
-        {
-            // A value that no column takes: NaN, or a name that is missing.
-            Reset();
-            throw new JournalRowException(e.Message, e);
         }
         catch
         {
@@ -88,7 +83,7 @@ internal sealed class SqliteJournal(SqliteConnections connections) : IJournal, I
             PlaceRow? row = context.Places.Find(place.Key.Site, place.Key.Place);
             if (row is null)
                 context.Places.Add(row = new PlaceRow { Site = place.Key.Site, Place = place.Key.Place });
-            row.Definition = JsonSerializer.Serialize(place);
+            row.Definition = JsonSerializer.Serialize(place, PlaceJson.Options);
         }
 
         context.SaveChanges();
@@ -100,6 +95,9 @@ internal sealed class SqliteJournal(SqliteConnections connections) : IJournal, I
         19 or 20 or 18 or 25 => new JournalRowException(e.Message, e),
         13 => new JournalUnavailableException("the disk is full", e),
         10 => new JournalUnavailableException($"the disk reports an error ({e.Message})", e),
+        5 or 6 => new JournalUnavailableException("another program holds the store", e),
+        8 or 14 => new JournalUnavailableException($"the store cannot be written to ({e.Message})", e),
+        11 or 26 => new JournalUnavailableException($"the store is damaged, restore a backup ({e.Message})", e),
         _ => new JournalUnavailableException(e.Message, e),
     };
 }

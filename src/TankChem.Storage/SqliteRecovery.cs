@@ -13,7 +13,7 @@ namespace TankChem.Storage;
 /// <summary>Reads back what a start needs.</summary>
 internal sealed class SqliteRecovery(SqliteConnections connections) : IRecovery
 {
-    private const string Columns = "s.site, s.place, s.quantity, s.probe, r.time_ms, r.received_ms, r.raw_value, r.raw_unit, r.value, r.flag, r.reason, r.origin";
+    private const string Columns = $"s.site, s.place, s.quantity, s.probe, {ReadingReader.Columns}";
 
     // Each series is one seek from its end, however long its history is.
     private const string Latest = $"""
@@ -44,7 +44,7 @@ internal sealed class SqliteRecovery(SqliteConnections connections) : IRecovery
             using SqliteDataReader reader = command.ExecuteReader();
             while (reader.Read())
             {
-                Reading reading = ReadingReader.One(reader, new PlaceKey(reader.GetString(0), reader.GetString(1)), 2);
+                Reading reading = ReadingReader.One(reader, new SeriesKey(new PlaceKey(reader.GetString(0), reader.GetString(1)), reader.GetString(2), reader.GetString(3)), 4);
                 readings[(reading.Series, reading.Time)] = reading;
             }
         }
@@ -56,7 +56,7 @@ internal sealed class SqliteRecovery(SqliteConnections connections) : IRecovery
     {
         using SqliteConnection connection = connections.OpenReader();
         using StoreContext context = SqliteConnections.Context(connection);
-        return [.. context.Places.AsNoTracking().AsEnumerable().Select(r => JsonSerializer.Deserialize<PlaceDefinition>(r.Definition) ?? throw new InvalidDataException($"The set-up of {r.Site}/{r.Place} in the store is empty."))];
+        return [.. context.Places.AsNoTracking().AsEnumerable().Select(r => JsonSerializer.Deserialize<PlaceDefinition>(r.Definition, PlaceJson.Options) ?? throw new InvalidDataException($"The set-up of {r.Site}/{r.Place} in the store is empty."))];
     }
 
     public IReadOnlyList<Reading> LoadUnconfirmed(SeriesKey series, DateTimeOffset from, int limit)
@@ -64,7 +64,7 @@ internal sealed class SqliteRecovery(SqliteConnections connections) : IRecovery
         using SqliteConnection connection = connections.OpenReader();
         using SqliteCommand command = connection.CreateCommand();
         command.CommandText = $"""
-            SELECT s.quantity, s.probe, r.time_ms, r.received_ms, r.raw_value, r.raw_unit, r.value, r.flag, r.reason, r.origin
+            SELECT {ReadingReader.Columns}
             FROM reading r JOIN series s ON s.id = r.series_id
             WHERE s.site = $site AND s.place = $place AND s.quantity = $quantity AND s.probe = $probe AND r.time_ms >= $from AND r.raw_unit IS NULL
             ORDER BY r.time_ms LIMIT $limit
@@ -73,8 +73,12 @@ internal sealed class SqliteRecovery(SqliteConnections connections) : IRecovery
         command.Parameters.AddWithValue("$place", series.Place.Place);
         command.Parameters.AddWithValue("$quantity", series.Quantity);
         command.Parameters.AddWithValue("$probe", series.Probe);
-        command.Parameters.AddWithValue("$from", RowMapping.Ms(from));
+        command.Parameters.AddWithValue("$from", RowMapping.EdgeMs(from));
         command.Parameters.AddWithValue("$limit", limit);
-        return ReadingReader.All(command, series.Place);
+        var kept = new List<Reading>();
+        using SqliteDataReader reader = command.ExecuteReader();
+        while (reader.Read())
+            kept.Add(ReadingReader.One(reader, series, 0));
+        return kept;
     }
 }

@@ -1,16 +1,11 @@
 using Microsoft.Data.Sqlite;
-using Microsoft.EntityFrameworkCore;
 using TankChem.Monitoring.Ports;
-using TankChem.Storage.Model;
 
 namespace TankChem.Storage;
 
 /// <summary>The store on one SQLite file: one writer, many readers.</summary>
 public sealed class SqliteStore : IDisposable
 {
-    private const int SqliteNotADatabase = 26;
-    private const int SqliteCorrupt = 11;
-
     private readonly FileStream ownership;
     private readonly SqliteConnections connections;
     private readonly SqliteJournal journal;
@@ -46,11 +41,11 @@ public sealed class SqliteStore : IDisposable
     public static SqliteStore Open(string path)
     {
         string full = Path.GetFullPath(path);
-        FileStream owned = Own(full);
+        FileStream owned = StoreOpening.Own(full);
         try
         {
             var opened = new SqliteConnections(full);
-            Migrate(full, opened);
+            StoreOpening.Prepare(full, opened);
             return new SqliteStore(full, owned, opened);
         }
         catch
@@ -60,54 +55,30 @@ public sealed class SqliteStore : IDisposable
         }
     }
 
+    /// <summary>What it holds and the room it has; counted from the days' figures, so the cost does not grow with the readings.</summary>
+    public StoreInfo Info()
+    {
+        using SqliteConnection connection = connections.OpenReader();
+        using SqliteCommand command = connection.CreateCommand();
+        command.CommandText = $"""
+            SELECT (SELECT count(*) FROM series),
+                   (SELECT coalesce(sum(counted), 0) FROM series s CROSS JOIN reading_rollup r ON r.series_id = s.id WHERE r.step_h = {Hours.InADay}),
+                   (SELECT coalesce(sum(counted), 0) FROM state_series s CROSS JOIN state_rollup r ON r.state_series_id = s.id WHERE r.step_h = {Hours.InADay}),
+                   (SELECT count(*) FROM correction)
+            """;
+        using SqliteDataReader row = command.ExecuteReader();
+        row.Read();
+        long free = new DriveInfo(Path.GetDirectoryName(FullPath)!).AvailableFreeSpace;
+        return new StoreInfo(SizeBytes, free, row.GetInt64(0), row.GetInt64(1), row.GetInt64(2), row.GetInt64(3));
+    }
+
     /// <inheritdoc/>
     public void Dispose()
     {
+        // The writer last: the last one to close folds the log into the file.
+        connections.CloseReaders();
         journal.Dispose();
-        using (var reader = new SqliteConnection(new SqliteConnectionStringBuilder { DataSource = FullPath, Pooling = true, DefaultTimeout = 30 }.ToString()))
-            SqliteConnection.ClearPool(reader);
         ownership.Dispose();
-    }
-
-    private static FileStream Own(string full)
-    {
-        if (Directory.Exists(full))
-            throw new StoreOpenException($"{full} is a folder; the store needs a file name.");
-        try
-        {
-            Directory.CreateDirectory(Path.GetDirectoryName(full)!);
-            return new FileStream(full + ".lock", FileMode.OpenOrCreate, FileAccess.ReadWrite, FileShare.None);
-        }
-        catch (UnauthorizedAccessException e)
-        {
-            throw new StoreOpenException($"The store {full} cannot be written to: {e.Message}", e);
-        }
-        catch (IOException e)
-        {
-            throw new StoreOpenException($"The store {full} is in use by another TankChem, or its folder cannot be written to ({e.Message}). Stop the other one, or take another data folder.", e);
-        }
-    }
-
-    private static void Migrate(string full, SqliteConnections connections)
-    {
-        try
-        {
-            using SqliteConnection connection = connections.OpenWriter();
-            using StoreContext context = SqliteConnections.Context(connection);
-            HashSet<string> known = [.. context.Database.GetMigrations()];
-            string[] newer = [.. context.Database.GetAppliedMigrations().Where(m => !known.Contains(m))];
-            if (newer.Length > 0)
-                throw new StoreOpenException($"The store {full} was written by a newer version of TankChem (it has {newer[^1]}, this version ends with {known.Max(StringComparer.Ordinal)}). Use that version, or another data folder. The file was not changed.");
-            context.Database.Migrate();
-        }
-        catch (SqliteException e) when (e.SqliteErrorCode is SqliteNotADatabase or SqliteCorrupt)
-        {
-            throw new StoreOpenException($"{full} is not a TankChem store, or it is damaged ({e.Message}). It was not changed: move it away, or restore a backup.", e);
-        }
-        catch (SqliteException e)
-        {
-            throw new StoreOpenException($"The store {full} cannot be opened: {e.Message}", e);
-        }
     }
 
     private static long Length(string path) => File.Exists(path) ? new FileInfo(path).Length : 0;

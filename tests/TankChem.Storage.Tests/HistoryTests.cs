@@ -1,4 +1,3 @@
-using TankChem.Monitoring.Places;
 using TankChem.Monitoring.Ports;
 using TankChem.Monitoring.Readings;
 using TankChem.Monitoring.Water;
@@ -49,7 +48,7 @@ public sealed class HistoryTests : IDisposable
     [Fact]
     public async Task TrendAsync_ComputedQuantity_ComesFromTheWaterStates()
     {
-        fixture.Store.Journal.Commit(new JournalBatch { States = [State(Noon, 10, false), State(Noon.AddMinutes(1), 12, false), State(Noon.AddMinutes(2), 99, true)] });
+        fixture.Store.Journal.Commit(new JournalBatch { States = [State(Noon, 10), State(Noon.AddMinutes(1), 12), State(Noon.AddMinutes(2), 99, stale: true)] });
 
         TrendBucket bucket = Assert.Single(await History.TrendAsync(Tank, "co2", Noon, Noon.AddHours(1), 1, CancellationToken.None));
 
@@ -75,14 +74,48 @@ public sealed class HistoryTests : IDisposable
         Assert.Equal(all, seen);
     }
 
-    private static WaterState State(DateTimeOffset time, double co2, bool stale) => new()
+    [Fact]
+    public async Task Pco2_OfAProbe_IsTrendedAsMeasuredAndNeverAsComputed()
     {
-        Place = Tank,
-        Kind = PlaceKind.Tank,
-        Assigned = true,
-        Time = time,
-        Status = WaterStatus.Ok,
-        Reason = null,
-        Values = new Dictionary<string, WaterValue>(StringComparer.Ordinal) { ["co2"] = new() { Value = co2, Unit = "mg/L", U = 1, Time = time, Stale = stale } },
-    };
+        WaterState water = State(Noon, 12) with { Values = new Dictionary<string, WaterValue>(StringComparer.Ordinal) { ["pco2"] = new() { Value = 2_000, Unit = "µatm", U = 50, Time = Noon } } };
+        fixture.Store.Journal.Commit(new JournalBatch { Readings = [Reading(Noon, 3_000, "pco2")], States = [water] });
+
+        Assert.Equal(2_000, Assert.Single(await History.TrendAsync(Tank, "pco2", Noon, Noon.AddHours(1), 10, CancellationToken.None)).Mean);
+        Assert.Equal(3_000, Assert.Single(await History.TrendAsync(Tank, "pco2-measured", Noon, Noon.AddHours(1), 10, CancellationToken.None)).Mean);
+        Assert.Equal(3_000, Assert.Single(await History.ReadingsAsync(Tank, "pco2-measured", Noon, Noon.AddHours(1), null, 10, CancellationToken.None)).Value);
+    }
+
+    [Fact]
+    public async Task TrendAsync_ReadAndComputed_PrefersTheReadings()
+    {
+        WaterState water = State(Noon, 12) with { Values = new Dictionary<string, WaterValue>(StringComparer.Ordinal) { ["oxygen-saturation"] = new() { Value = 80, Unit = "%", U = 2, Time = Noon } } };
+        fixture.Store.Journal.Commit(new JournalBatch { States = [water] });
+        Assert.Equal(80, Assert.Single(await History.TrendAsync(Tank, "oxygen-saturation", Noon, Noon.AddHours(1), 10, CancellationToken.None)).Mean);
+
+        fixture.Store.Journal.Commit(new JournalBatch { Readings = [Reading(Noon, 90, "oxygen-saturation")] });
+
+        Assert.Equal(90, Assert.Single(await History.TrendAsync(Tank, "oxygen-saturation", Noon, Noon.AddHours(1), 10, CancellationToken.None)).Mean);
+    }
+
+    [Fact]
+    public async Task Range_WithPartsOfAMillisecond_HoldsExactlyWhatIsInIt()
+    {
+        Reading[] all = [Reading(Noon, 1), Reading(Noon.AddMilliseconds(1), 2), Reading(Noon.AddMilliseconds(2), 3)];
+        fixture.Store.Journal.Commit(new JournalBatch { Readings = all });
+        DateTimeOffset from = Noon.AddTicks(1), to = Noon.AddMilliseconds(2).AddTicks(1);
+
+        Assert.Equal(all[1..], await History.ReadingsAsync(Tank, "ph", from, to, null, 10, CancellationToken.None));
+        Assert.Equal(2, Assert.Single(await History.TrendAsync(Tank, "ph", from, to, 1, CancellationToken.None)).Count);
+        Assert.Empty(await History.TrendAsync(Tank, "ph", Noon.AddTicks(1), Noon.AddTicks(2), 10, CancellationToken.None));
+    }
+
+    [Fact]
+    public async Task AllReadingsAsync_IsInOrderAndStopsAtTheLimit()
+    {
+        Reading[] all = [.. Enumerable.Range(0, 5).SelectMany(i => new[] { Reading(Noon.AddSeconds(i), i), Reading(Noon.AddSeconds(i), 15, "temperature") })];
+        fixture.Store.Journal.Commit(new JournalBatch { Readings = [.. all.Reverse()] });
+
+        Assert.Equal(all, await History.AllReadingsAsync(Tank, Noon, Noon.AddHours(1), 100, CancellationToken.None));
+        Assert.Equal(all[..7], await History.AllReadingsAsync(Tank, Noon, Noon.AddHours(1), 7, CancellationToken.None));
+    }
 }

@@ -12,6 +12,18 @@ namespace TankChem.Storage.Tests;
 
 public sealed class JournalTests : IDisposable
 {
+    private static readonly AlarmJournalEntry Raised = new()
+    {
+        Key = new AlarmKey(Tank, "co2-high"),
+        At = Noon,
+        Change = AlarmChange.Raised,
+        Priority = AlarmPriority.High,
+        Title = "CO2 high",
+        Sentence = "CO2 is high: 24 mg/L",
+        Value = 24,
+        SetPoint = 15,
+    };
+
     private readonly StoreFixture fixture = new();
 
     private SqliteStore Store => fixture.Store;
@@ -51,12 +63,36 @@ public sealed class JournalTests : IDisposable
         Assert.Single(await AllAsync());
     }
 
-    [Fact]
-    public async Task Commit_NotANumber_IsARowException()
+    [Theory]
+    [InlineData(double.NaN)]
+    [InlineData(double.PositiveInfinity)]
+    public async Task Commit_NotAFiniteNumber_IsARowException(double number)
     {
-        Assert.Throws<JournalRowException>(() => Store.Journal.Commit(new JournalBatch { Readings = [Reading(Noon, double.NaN)] }));
+        Assert.Throws<JournalRowException>(() => Store.Journal.Commit(new JournalBatch { Readings = [Reading(Noon, number)] }));
+        Assert.Throws<JournalRowException>(() => Store.Journal.Commit(new JournalBatch { States = [State(Noon, number)] }));
 
         Assert.Empty(await AllAsync());
+        Assert.Empty(await Store.History.StateValuesAsync(Tank, Noon, Noon.AddHours(1), CancellationToken.None));
+    }
+
+    [Fact]
+    public async Task Commit_AlarmWhoseValueIsNoNumber_KeepsTheLineWithoutTheNumber()
+    {
+        Store.Journal.Commit(new JournalBatch { AlarmEntries = [Raised with { Value = double.NaN }] });
+
+        Assert.Equal(Raised with { Value = null }, Assert.Single(await Store.History.AlarmJournalAsync(null, Noon, Noon.AddHours(1), CancellationToken.None)));
+    }
+
+    [Fact]
+    public async Task Commit_LastRecordOfABatchCannotBeStored_StoresNothingOfIt()
+    {
+        LogEntry bad = new() { Place = Tank, At = Noon, RecordedAt = Noon, Kind = LogKind.Note, Who = null!, Text = "without a name" };
+
+        Assert.Throws<JournalRowException>(() => Store.Journal.Commit(new JournalBatch { Readings = [Reading(Noon, 7.2)], States = [State(Noon, 12)], AlarmEntries = [Raised], Log = [bad] }));
+
+        Assert.Empty(await AllAsync());
+        Assert.Empty(await Store.History.AlarmJournalAsync(null, Noon, Noon.AddHours(1), CancellationToken.None));
+        Assert.Equal((0, 0, 0), (Count("state_value"), Count("reading_rollup"), Count("state_rollup")));
     }
 
     [Fact]
@@ -124,14 +160,13 @@ public sealed class JournalTests : IDisposable
     [Fact]
     public async Task Records_RoundTrip()
     {
-        var entry = new AlarmJournalEntry { Key = new AlarmKey(Tank, "co2-high"), At = Noon, Change = AlarmChange.Raised, Priority = AlarmPriority.High, Title = "CO2 high", Sentence = "CO2 is high: 24 mg/L", Value = 24, SetPoint = 15 };
         var log = new LogEntry { Place = Tank, At = Noon, RecordedAt = Noon.AddMinutes(5), Kind = LogKind.Feed, Who = "Ada", Text = "fed", Amount = 2.5, Unit = "kg" };
         var loss = new LossRecord { Place = Tank, FoundAt = Noon, Count = 12, Stock = "salmonid", Who = "Ada", Notes = "gills pale", RecordedAt = Noon.AddMinutes(9) };
         var unreadable = new UnreadablePayload("tankchem/in/x", Noon, 3, "abc"u8.ToArray(), "not a number", "probe-1");
 
-        Store.Journal.Commit(new JournalBatch { AlarmEntries = [entry], Log = [log], Losses = [loss], Unreadable = [unreadable] });
+        Store.Journal.Commit(new JournalBatch { AlarmEntries = [Raised], Log = [log], Losses = [loss], Unreadable = [unreadable] });
 
-        Assert.Equal(entry, Assert.Single(await Store.History.AlarmJournalAsync(Tank, Noon, Noon.AddHours(1), CancellationToken.None)));
+        Assert.Equal(Raised, Assert.Single(await Store.History.AlarmJournalAsync(Tank, Noon, Noon.AddHours(1), CancellationToken.None)));
         Assert.Equal(log, Assert.Single(await Store.History.LogAsync(null, Noon, Noon.AddHours(1), 5, CancellationToken.None)) with { Id = 0 });
         LossRecord back = Assert.Single(await Store.History.LossesAsync(CancellationToken.None));
         Assert.Equal(loss, back with { Id = 0 });
@@ -140,6 +175,19 @@ public sealed class JournalTests : IDisposable
         UnreadablePayload payload = Assert.Single(await Store.History.UnreadableAsync(5, CancellationToken.None));
         Assert.Equal(unreadable with { Head = payload.Head }, payload);
         Assert.Equal("abc"u8.ToArray(), payload.Head.ToArray());
+    }
+
+    [Fact]
+    public void Info_CountsWhatIsThere()
+    {
+        Store.Journal.Commit(new JournalBatch { Readings = [Reading(Noon, 7), Reading(Noon.AddHours(30), 8), Reading(Noon, 15, "temperature"), Reading(Noon.AddMinutes(1), 9, flag: QualityFlag.Suspect)], States = [State(Noon, 12)] });
+        Store.Journal.Commit(new JournalBatch { Readings = [Reading(Noon, 7.1)] });
+
+        StoreInfo info = Store.Info();
+
+        Assert.Equal((2, 3, 1, 1), (info.Series, info.UsableReadings, info.StateValues, info.Corrections));
+        Assert.True(info.FileBytes > 4096);
+        Assert.True(info.FreeDiskBytes > 0);
     }
 
     private Task<IReadOnlyList<Reading>> AllAsync() => Store.History.ReadingsAsync(Tank, "ph", Noon.AddDays(-1), Noon.AddDays(1), null, 100, CancellationToken.None);

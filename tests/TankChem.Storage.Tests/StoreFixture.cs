@@ -1,5 +1,6 @@
 using TankChem.Monitoring.Places;
 using TankChem.Monitoring.Readings;
+using TankChem.Monitoring.Water;
 using TankChem.TestKit;
 
 namespace TankChem.Storage.Tests;
@@ -34,6 +35,17 @@ public sealed class StoreFixture : IDisposable
         Flag = flag,
         Reason = flag == QualityFlag.Pass ? null : "because",
         Origin = ReadingOrigin.Live,
+    };
+
+    public static WaterState State(DateTimeOffset time, double co2, bool stale = false) => new()
+    {
+        Place = Tank,
+        Kind = PlaceKind.Tank,
+        Assigned = true,
+        Time = time,
+        Status = WaterStatus.Ok,
+        Reason = null,
+        Values = new Dictionary<string, WaterValue>(StringComparer.Ordinal) { ["co2"] = new() { Value = co2, Unit = "mg/L", U = 1, Time = time, Stale = stale } },
     };
 
     public void Dispose()

@@ -335,6 +335,41 @@ namespace TankChem.Migrations.Sqlite.Migrations
                     b.ToTable("place", (string)null);
                 });
 
+            modelBuilder.Entity("TankChem.Storage.Model.ReadingRollupRow", b =>
+                {
+                    b.Property<long>("SeriesId")
+                        .HasColumnType("INTEGER")
+                        .HasColumnName("series_id");
+
+                    b.Property<int>("StepH")
+                        .HasColumnType("INTEGER")
+                        .HasColumnName("step_h");
+
+                    b.Property<long>("StartH")
+                        .HasColumnType("INTEGER")
+                        .HasColumnName("start_h");
+
+                    b.Property<long>("Counted")
+                        .HasColumnType("INTEGER")
+                        .HasColumnName("counted");
+
+                    b.Property<double>("Highest")
+                        .HasColumnType("REAL")
+                        .HasColumnName("highest");
+
+                    b.Property<double>("Lowest")
+                        .HasColumnType("REAL")
+                        .HasColumnName("lowest");
+
+                    b.Property<double>("Total")
+                        .HasColumnType("REAL")
+                        .HasColumnName("total");
+
+                    b.HasKey("SeriesId", "StepH", "StartH");
+
+                    b.ToTable("reading_rollup", (string)null);
+                });
+
             modelBuilder.Entity("TankChem.Storage.Model.ReadingRow", b =>
                 {
                     b.Property<long>("SeriesId")
@@ -411,6 +446,41 @@ namespace TankChem.Migrations.Sqlite.Migrations
                         .IsUnique();
 
                     b.ToTable("series", (string)null);
+                });
+
+            modelBuilder.Entity("TankChem.Storage.Model.StateRollupRow", b =>
+                {
+                    b.Property<long>("StateSeriesId")
+                        .HasColumnType("INTEGER")
+                        .HasColumnName("state_series_id");
+
+                    b.Property<int>("StepH")
+                        .HasColumnType("INTEGER")
+                        .HasColumnName("step_h");
+
+                    b.Property<long>("StartH")
+                        .HasColumnType("INTEGER")
+                        .HasColumnName("start_h");
+
+                    b.Property<long>("Counted")
+                        .HasColumnType("INTEGER")
+                        .HasColumnName("counted");
+
+                    b.Property<double>("Highest")
+                        .HasColumnType("REAL")
+                        .HasColumnName("highest");
+
+                    b.Property<double>("Lowest")
+                        .HasColumnType("REAL")
+                        .HasColumnName("lowest");
+
+                    b.Property<double>("Total")
+                        .HasColumnType("REAL")
+                        .HasColumnName("total");
+
+                    b.HasKey("StateSeriesId", "StepH", "StartH");
+
+                    b.ToTable("state_rollup", (string)null);
                 });
 
             modelBuilder.Entity("TankChem.Storage.Model.StateSeriesRow", b =>

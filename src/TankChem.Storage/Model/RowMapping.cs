@@ -20,8 +20,8 @@ internal static class RowMapping
         Priority = Codes.Of(entry.Priority),
         Title = entry.Title,
         Sentence = entry.Sentence,
-        Value = entry.Value,
-        SetPoint = entry.SetPoint,
+        Value = Finite(entry.Value),
+        SetPoint = Finite(entry.SetPoint),
         Who = entry.Who,
         Why = entry.Why,
     };
@@ -138,7 +138,17 @@ internal static class RowMapping
 
     public static long Ms(DateTimeOffset time) => time.ToUnixTimeMilliseconds();
 
+    /// <summary>An end of a range, from ≤ t &lt; to: the first millisecond that is not before it, so that a part of a millisecond neither takes in a row from before nor leaves out the newest.</summary>
+    public static long EdgeMs(DateTimeOffset edge)
+    {
+        long ms = Ms(edge);
+        return edge.UtcTicks % TimeSpan.TicksPerMillisecond == 0 || ms == Ms(DateTimeOffset.MaxValue) ? ms : ms + 1;
+    }
+
     public static DateTimeOffset Time(long ms) => DateTimeOffset.FromUnixTimeMilliseconds(ms);
+
+    /// <summary>A line of the alarm journal is never lost for a number that is none: its sentence says what there is to say.</summary>
+    private static double? Finite(double? number) => number is { } value && double.IsFinite(value) ? value : null;
 
     private static long? Ms(DateTimeOffset? time) => time?.ToUnixTimeMilliseconds();
 

@@ -86,6 +86,38 @@ internal sealed class StateValueRow
     public double? U { get; set; }
 }
 
+/// <summary>What a series' values come to over an hour or a day, UTC.</summary>
+internal abstract class RollupRow
+{
+    /// <summary>1 or 24.</summary>
+    public int StepH { get; set; }
+
+    /// <summary>Its first hour, since 1970.</summary>
+    public long StartH { get; set; }
+
+    public double Lowest { get; set; }
+
+    public double Highest { get; set; }
+
+    /// <summary>Sum of the values.</summary>
+    public double Total { get; set; }
+
+    /// <summary>How many there are.</summary>
+    public long Counted { get; set; }
+}
+
+/// <summary>Of the readings of good quality.</summary>
+internal sealed class ReadingRollupRow : RollupRow
+{
+    public long SeriesId { get; set; }
+}
+
+/// <summary>Of the values of water states.</summary>
+internal sealed class StateRollupRow : RollupRow
+{
+    public long StateSeriesId { get; set; }
+}
+
 /// <summary>An alarm's state.</summary>
 internal sealed class AlarmStateRow
 {

@@ -39,3 +39,13 @@ internal sealed class StateValueConfiguration : IEntityTypeConfiguration<StateVa
 {
     public void Configure(EntityTypeBuilder<StateValueRow> builder) => builder.ToTable("state_value").HasKey(r => new { r.StateSeriesId, r.TimeMs });
 }
+
+internal sealed class ReadingRollupConfiguration : IEntityTypeConfiguration<ReadingRollupRow>
+{
+    public void Configure(EntityTypeBuilder<ReadingRollupRow> builder) => builder.ToTable("reading_rollup").HasKey(r => new { r.SeriesId, r.StepH, r.StartH });
+}
+
+internal sealed class StateRollupConfiguration : IEntityTypeConfiguration<StateRollupRow>
+{
+    public void Configure(EntityTypeBuilder<StateRollupRow> builder) => builder.ToTable("state_rollup").HasKey(r => new { r.StateSeriesId, r.StepH, r.StartH });
+}
