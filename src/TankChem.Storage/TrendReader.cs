@@ -6,14 +6,19 @@ namespace TankChem.Storage;
 
 /// <summary>Minimum, mean and maximum per bucket over some series of one table.</summary>
 /// <remarks>
-/// A bucket narrower than an hour is read from the values. A wider one is made of whole hours, a very wide one of whole days, so that
-/// a year costs a few thousand figures; what the range cuts off an hour at its ends is read from the values. Either way
-/// each value between the two ends counts exactly once.
+/// The range is cut into equal buckets. Where they are wide, each edge is moved to the nearest whole hour (very wide: UTC day), so that the
+/// buckets are made of roll-ups and a year costs a few thousand figures; what the range cuts off an hour at its two ends is read from the
+/// values. Either way each value counts exactly once, in the bucket whose printed edges it lies between.
 /// </remarks>
 internal sealed class TrendReader
 {
+    /// <summary>Moving an edge by half an hour is a quarter of two hours at most, and half a day an eighth of four days.</summary>
+    private const long WideMs = 2 * Hours.Ms;
+    private const long VeryWideMs = 4 * DayMs;
+    private const long DayMs = Hours.InADay * Hours.Ms;
+
     /// <summary>Up to here the values are read even where hours would do: it is fast, and the buckets are equal to the millisecond.</summary>
-    private const long ValuesUpToMs = 2 * Hours.InADay * Hours.Ms;
+    private const long ValuesUpToMs = 2 * DayMs;
 
     private readonly SqliteConnection connection;
     private readonly SeriesTable table;
@@ -39,59 +44,75 @@ internal sealed class TrendReader
         // Both ends can be within one millisecond, in which nothing is.
         if (Span == 0)
             return [];
-        bool wholeHours = fromMs % Hours.Ms == 0 && Span % (points * Hours.Ms) == 0;
-        if (wholeHours)
-            return ReadSteps(series, Hours.Ms, fromMs, Span / points);
-        if (Span < points * Hours.Ms || Span <= ValuesUpToMs)
-            return ReadValues(series);
-        long step = Span >= points * Hours.InADay * Hours.Ms ? Hours.InADay * Hours.Ms : Hours.Ms;
-        return ReadSteps(series, step, Hours.Floor(fromMs, step), Hours.Ceiling(CeilingDivide(Span, points), step));
-    }
-
-    private List<TrendBucket> ReadValues(IReadOnlyList<long> series)
-    {
+        long step = Step();
         foreach (long id in series)
-            AddValues(id, fromMs, toMs, $"(time_ms - {fromMs}) * {points} / {Span}");
-        return Buckets(i => fromMs + CeilingDivide(i * Span, points));
+        {
+            if (step == 0)
+                AddValues(id, fromMs, toMs, $"(time_ms - {fromMs}) * {points} / {Span}");
+            else
+                AddSteps(id, step);
+        }
+
+        return [.. sums.Select(b => new TrendBucket(
+            RowMapping.Time(Edge(b.Key, step)), RowMapping.Time(Edge(b.Key + 1, step)), b.Value.Lowest, b.Value.Total / b.Value.Counted, b.Value.Highest, b.Value.Counted))];
     }
 
-    private List<TrendBucket> ReadSteps(IReadOnlyList<long> series, long step, long anchor, long width)
+    /// <summary>What the buckets are made of: whole days, whole hours, or (0) the values themselves.</summary>
+    private long Step()
     {
-        // When the first bucket is cut short, the last one takes the rest, which is less than a step.
-        string index = $"min(({{0}} - {anchor}) / {width}, {points - 1})";
-        foreach (long id in series)
-            AddRange(id, fromMs, toMs, step, index);
-        return Buckets(i => i == 0 ? fromMs : i == points ? toMs : Math.Min(toMs, anchor + (i * width)));
+        if (IsExact(DayMs))
+            return DayMs;
+        if (IsExact(Hours.Ms))
+            return Hours.Ms;
+        if (Span <= ValuesUpToMs || Span < points * WideMs)
+            return 0;
+        return Span < points * VeryWideMs ? Hours.Ms : DayMs;
     }
 
-    /// <summary>Whole steps from the figures of that step, the two ends from the next finer ones, in the end from the values.</summary>
-    private void AddRange(long series, long start, long end, long step, string index)
+    /// <summary>Whether every edge of the equal buckets is a whole step already.</summary>
+    private bool IsExact(long step) => fromMs % step == 0 && Span % (points * step) == 0;
+
+    private long Edge(long bucket, long step)
+    {
+        if (bucket == 0)
+            return fromMs;
+        if (bucket == points)
+            return toMs;
+
+        // The first whole millisecond of the bucket, so that the printed edges say exactly which values are in it.
+        long equal = fromMs + (((bucket * Span) + points - 1) / points);
+        return step == 0 ? equal : Hours.Floor(equal + (step / 2), step);
+    }
+
+    /// <summary>Whole steps by the bucket that the middle of each is in; both ends, shorter than a step, belong to the first and the last bucket.</summary>
+    private void AddSteps(long series, long step)
+    {
+        long first = Hours.Ceiling(fromMs, step), last = Hours.Floor(toMs, step);
+        AddEnd(series, fromMs, first, step, "0");
+        AddFigures(series, first, last, step, $"(start_h * {Hours.Ms} + {(step / 2) - 1 - fromMs}) * {points} / {Span}");
+        AddEnd(series, last, toMs, step, $"{points - 1}");
+    }
+
+    private void AddEnd(long series, long start, long end, long step, string bucket)
     {
         if (start >= end)
             return;
-        long first = Hours.Ceiling(start, step), last = Hours.Floor(end, step);
-        if (first >= last)
+        if (step == Hours.Ms)
         {
-            AddFiner(series, start, end, step, index);
+            AddValues(series, start, end, bucket);
             return;
         }
 
-        AddFiner(series, start, first, step, index);
-        AddFigures(series, first, last, step, index);
-        AddFiner(series, last, end, step, index);
-    }
-
-    private void AddFiner(long series, long start, long end, long step, string index)
-    {
-        if (step > Hours.Ms)
-            AddRange(series, start, end, Hours.Ms, index);
-        else if (start < end)
-            AddValues(series, start, end, Format(index, "time_ms"));
+        // One side of a day's end is a whole hour; the other is where the range was cut.
+        long first = Math.Min(end, Hours.Ceiling(start, Hours.Ms)), last = Math.Max(first, Hours.Floor(end, Hours.Ms));
+        AddValues(series, start, first, bucket);
+        AddFigures(series, first, last, Hours.Ms, bucket);
+        AddValues(series, last, end, bucket);
     }
 
     private void AddFigures(long series, long start, long end, long step, string index) => Add(
         $"""
-        SELECT {Format(index, $"start_h * {Hours.Ms}")} AS bucket, min(lowest), sum(total), max(highest), sum(counted) FROM {table.Rollup}
+        SELECT {index} AS bucket, min(lowest), sum(total), max(highest), sum(counted) FROM {table.Rollup}
         WHERE {table.Id} = $series AND step_h = {step / Hours.Ms} AND start_h >= $start AND start_h < $end GROUP BY bucket
         """,
         series,
@@ -122,14 +143,6 @@ internal sealed class TrendReader
             sums[bucket] = sums.TryGetValue(bucket, out Sum known) ? known.With(sum) : sum;
         }
     }
-
-    private List<TrendBucket> Buckets(Func<long, long> edge) =>
-        [.. sums.Select(b => new TrendBucket(RowMapping.Time(edge(b.Key)), RowMapping.Time(edge(b.Key + 1)), b.Value.Lowest, b.Value.Total / b.Value.Counted, b.Value.Highest, b.Value.Counted))];
-
-    /// <summary>The first whole millisecond of a bucket, so that the printed edges say exactly which values are in it.</summary>
-    private static long CeilingDivide(long a, long b) => (a + b - 1) / b;
-
-    private static string Format(string index, string time) => index.Replace("{0}", time, StringComparison.Ordinal);
 
     private readonly record struct Sum(double Lowest, double Total, double Highest, long Counted)
     {

@@ -56,6 +56,26 @@ public sealed class RollupTests : IDisposable
         Assert.All(buckets, (bucket, i) => Assert.Equal((Noon.AddHours(i * hours / points), Noon.AddHours((i + 1) * hours / points)), (bucket.From, bucket.To)));
     }
 
+    [Theory]
+    [InlineData(7, 100)]
+    [InlineData(30, 300)]
+    [InlineData(90, 20)]
+    [InlineData(90, 1_000)]
+    public async Task TrendAsync_RangeThatFitsNoHours_GivesAllBucketsEachNearlyAsWideAsTheOthers(int days, int points)
+    {
+        DateTimeOffset from = Noon.AddMinutes(17).AddMilliseconds(3), to = from.AddDays(days);
+        Reading[] each = [.. Enumerable.Range(0, days * 144).Select(i => Reading(from.AddMinutes(10 * i), i))];
+        fixture.Store.Journal.Commit(new JournalBatch { Readings = each });
+
+        IReadOnlyList<TrendBucket> buckets = await fixture.Store.History.TrendAsync(Tank, "ph", from, to, points, CancellationToken.None);
+
+        TimeSpan equal = (to - from) / points;
+        Assert.Equal(points, buckets.Count);
+        Assert.All(buckets, b => Assert.InRange((b.To - b.From) / equal, 0.5, 1.5));
+        Assert.All(buckets.Zip(buckets.Skip(1)), pair => Assert.Equal(pair.First.To, pair.Second.From));
+        Assert.Equal((from, to, each.Length), (buckets[0].From, buckets[^1].To, (int)buckets.Sum(b => b.Count)));
+    }
+
     [Fact]
     public async Task TrendAsync_LateReadingAndCorrection_ChangeAnHourThatWasOver()
     {
@@ -91,6 +111,8 @@ public sealed class RollupTests : IDisposable
     {
         yield return (0, Days, 10);
         yield return (0, Days, Days);
+        yield return (0.5, Days - 1, Days - 1);
+        yield return (0.37, Days - 1, 5);
         yield return (-1, Days + 2, 1);
         yield return (3, 1, 24);
         yield return (3, 1.0 / 24, 1);
