@@ -6,6 +6,7 @@ namespace TankChem.EndToEnd.Tests.Processes;
 /// <summary>The Debian package's broker and client: MQTT that we did not write.</summary>
 internal sealed class Mosquitto : IDisposable
 {
+    private static int clients;
     private readonly TemporaryFolder folder = new();
     private readonly Process process;
 
@@ -23,7 +24,7 @@ internal sealed class Mosquitto : IDisposable
     /// <summary>Publishes one message with QoS 1 and waits for its acknowledgement.</summary>
     public static async Task PublishAsync(int port, string topic, string payload)
     {
-        ProgramRun run = await ProgramRun.RunAsync("mosquitto_pub", "", "-h", "127.0.0.1", "-p", $"{port}", "-q", "1", "-i", "probe", "-t", topic, "-m", payload);
+        ProgramRun run = await ProgramRun.RunAsync("mosquitto_pub", "", "-h", "127.0.0.1", "-p", $"{port}", "-q", "1", "-i", $"probe-{Interlocked.Increment(ref clients)}", "-t", topic, "-m", payload);
         Assert.True(run.ExitCode == 0, run.Error);
     }
 
