@@ -160,7 +160,8 @@ internal readonly struct BrackishWater
     /// <summary>The state between two: amounts that follow a law of mass action in their logarithm, what is balanced or a logarithm already as it stands.</summary>
     private static CarbonateState Between(in CarbonateState fresh, in CarbonateState sea, in CarbonateSlopes slopes, double w) => new()
     {
-        Status = SolveStatus.Solved,
+        Status = fresh.Status,
+        FaultyArgument = fresh.FaultyArgument,
         Caveats = fresh.Caveats | sea.Caveats | Caveats.Blended,
         PhNbs = fresh.PhNbs,
         PhTotal = Mean(fresh.PhTotal, sea.PhTotal, w),

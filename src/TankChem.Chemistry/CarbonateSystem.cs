@@ -37,8 +37,23 @@ public static class CarbonateSystem
             1 => new SeaWater(solution, shift).Solve(input),
             _ => new BrackishWater(solution, shift, share).Solve(input),
         };
-        return state with { DensityKgPerL = Density.KgPerL(solution.TemperatureC, solution.Salinity) };
+        if (state.Status is SolveStatus.Solved or SolveStatus.NotConverged && !Holds(state))
+        {
+            // Also where carbonate outgrew every bound before the ions were found.
+            return new CarbonateState
+            {
+                Status = SolveStatus.Impossible,
+                FaultyArgument = "together these two values ask for an alkalinity above 200000 or a DIC above 500000 µmol/kg, more than this model of water holds for",
+            };
+        }
+
+        return state.Status != SolveStatus.Solved ? state : state with { DensityKgPerL = Density.KgPerL(solution.TemperatureC, solution.Salinity) };
     }
+
+    /// <summary>Whether an answer stays within what would be taken as input; a millionth more is rounding.</summary>
+    private static bool Holds(in CarbonateState state) =>
+        state.AlkalinityUmolKg <= InputCheck.AlkalinityMaxUmolKg * (1 + 1e-6) && state.DicUmolKg <= InputCheck.DicMaxUmolKg * (1 + 1e-6)
+        && double.IsFinite(state.AlkalinityUmolKg) && double.IsFinite(state.Co2UmolKg) && double.IsFinite(state.PhNbs);
 
     /// <summary>Share of the sea-water model in the answer: 0 fresh, 1 sea.</summary>
     internal static double ShareOfSea(Solution solution) => solution.Constants switch

@@ -5,6 +5,12 @@ namespace TankChem.Chemistry;
 /// <summary>Finds what is wrong with a question before any number is computed.</summary>
 internal static class InputCheck
 {
+    /// <summary>Highest alkalinity, µmol/kg.</summary>
+    public const double AlkalinityMaxUmolKg = 200_000;
+
+    /// <summary>Highest DIC, µmol/kg.</summary>
+    public const double DicMaxUmolKg = 500_000;
+
     /// <summary>The first fault in words, or null.</summary>
     public static string? FaultOf(Solution solution, in CarbonateInput input)
     {
@@ -35,8 +41,8 @@ internal static class InputCheck
         if (given != 2)
             return $"ph, alkalinity_umol_kg, dic_umol_kg, pco2_uatm: {given} given; exactly two are needed";
         return (input.PH is { } ph ? Range("ph", ph, 2, 12, "") : null)
-            ?? (input.AlkalinityUmolKg is { } alkalinity ? Range("alkalinity_umol_kg", alkalinity, -5000, 200000, "µmol/kg") : null)
-            ?? (input.DicUmolKg is { } dic ? Range("dic_umol_kg", dic, 0, 500000, "µmol/kg") : null)
+            ?? (input.AlkalinityUmolKg is { } alkalinity ? Range("alkalinity_umol_kg", alkalinity, -5000, AlkalinityMaxUmolKg, "µmol/kg") : null)
+            ?? (input.DicUmolKg is { } dic ? Range("dic_umol_kg", dic, 0, DicMaxUmolKg, "µmol/kg") : null)
             ?? (input.Pco2Uatm is { } pco2 ? Range("pco2_uatm", pco2, double.Epsilon, 2000000, "µatm") : null);
     }
 

@@ -101,6 +101,9 @@ public class BadInputTests
             new() { PH = 2, AlkalinityUmolKg = -5000 },
             new() { PH = 2, Pco2Uatm = 2_000_000 },
             new() { PH = 7, Pco2Uatm = 1e-300 },
+            new() { PH = 12, Pco2Uatm = 2_000_000 },
+            new() { PH = 12, Pco2Uatm = 400 },
+            new() { PH = 9.5, Pco2Uatm = 1_000_000 },
             new() { AlkalinityUmolKg = 200_000, Pco2Uatm = 2_000_000 },
             new() { AlkalinityUmolKg = -5000, DicUmolKg = 0 },
             new() { AlkalinityUmolKg = 200_000, DicUmolKg = 500_000 },
@@ -117,6 +120,29 @@ public class BadInputTests
                 Assert.True(state.Status == SolveStatus.Impossible || (double.IsFinite(state.Co2UmolKg) && double.IsFinite(state.PhNbs) && double.IsFinite(state.BufferClosedUmolKg)), $"not finite at {t} °C for {input}");
             }
         }
+    }
+
+    /// <summary>Such a pair was once called solved, with numbers that were not.</summary>
+    [Theory]
+    [MemberData(nameof(BufferTests.AllKinds), MemberType = typeof(BufferTests))]
+    public void Solve_MoreCarbonateThanAnyWaterHolds_IsImpossible(string kind)
+    {
+        CarbonateInput[] inputs = [new() { PH = 12, Pco2Uatm = 400 }, new() { PH = 10.5, Pco2Uatm = 2_000_000 }, new() { PH = 9.5, Pco2Uatm = 1_000_000 }];
+        foreach (CarbonateInput input in inputs)
+        {
+            CarbonateState state = CarbonateSystem.Solve(Waters.Of(kind), input);
+
+            Assert.True(state.Status == SolveStatus.Impossible, $"{state.Status} for {input}");
+            Assert.Contains("more than this model of water holds for", state.FaultyArgument, StringComparison.Ordinal);
+        }
+    }
+
+    [Fact]
+    public void Solve_FreshWaterOfGreatIonicStrength_IsOutOfTheFittedRange()
+    {
+        CarbonateState state = Waters.Solved(new Solution { TemperatureC = 20, Ions = new IonComposition { SodiumMmolKg = 800, ChlorideMmolKg = 798 } }, new CarbonateInput { PH = 7.5, AlkalinityUmolKg = 2000 });
+
+        Assert.Equal(Caveats.OutOfFittedRange, state.Caveats);
     }
 
     [Fact]

@@ -50,7 +50,7 @@ public class BufferTests
     {
         Solution water = Waters.Of(kind);
         double before = 0;
-        for (double ph = 5; ph <= 9.5; ph += 0.01)
+        for (double ph = 5; ph <= 9.2; ph += 0.01)
         {
             CarbonateState state = Waters.Solved(water, new CarbonateInput { PH = ph, Pco2Uatm = 800 });
             if (state.AlkalinityUmolKg <= 0)

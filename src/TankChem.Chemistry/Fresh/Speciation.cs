@@ -19,6 +19,9 @@ internal struct Speciation
     /// <summary>The activity model ends well below this; a bracket's far ends pass through it and must stay finite.</summary>
     private const double IonicStrengthMax = 2;
 
+    /// <summary>Up to here the activity coefficients are good.</summary>
+    private const double IonicStrengthFitted = 0.5;
+
     private readonly Solution solution;
     private readonly FreshConstants k;
     private readonly ConstantShift shift;
@@ -53,6 +56,9 @@ internal struct Speciation
         Alkalinity = 1e-3;
         SetIons(Alkalinity);
     }
+
+    /// <summary>Whether the last answer was reached within the cap on iterations.</summary>
+    public bool Converged { get; private set; }
 
     /// <summary>Alkalinity of the last answer, mol/kg.</summary>
     public double Alkalinity { get; private set; }
@@ -107,6 +113,7 @@ internal struct Speciation
             FixAlkalinity(value);
         double aH = Math.Exp(-ph * Ln10);
         double startBefore = double.NaN, answerBefore = double.NaN;
+        Converged = false;
         for (int i = 0; i < IterationsMax; i++)
         {
             double start = ionicStrength;
@@ -117,7 +124,10 @@ internal struct Speciation
                 return false;
             double answer = ionicStrength;
             if (Math.Abs(answer - start) <= Tolerance * (1 + 10 * answer))
+            {
+                Converged = true;
                 break;
+            }
 
             // Where the line through the last two answers meets the diagonal (Wegstein 1958), unless it is too steep to trust.
             double slope = (answer - answerBefore) / (start - startBefore);
@@ -198,8 +208,9 @@ internal struct Speciation
         };
         return new CarbonateState
         {
-            Status = SolveStatus.Solved,
-            Caveats = caveats | (k.InFittedRange ? Caveats.None : Caveats.OutOfFittedRange),
+            Status = Converged ? SolveStatus.Solved : SolveStatus.NotConverged,
+            FaultyArgument = Converged ? null : "the free ions of this water were not found within the cap on iterations",
+            Caveats = caveats | (k.InFittedRange && ionicStrength <= IonicStrengthFitted ? Caveats.None : Caveats.OutOfFittedRange),
             PhNbs = ph,
             PhFree = ph - NbsMinus(PhScale.Free),
             PhTotal = ph - NbsMinus(PhScale.Total),
